@@ -1,0 +1,72 @@
+import { CompiledQuery } from 'kysely';
+import PgBoss from 'pg-boss';
+import { config } from '../config';
+import type { Actor } from '../access/actor';
+import { newId } from '../db/id';
+import type { Trx } from '../db/with-actor';
+
+/** The queue's tables are made by the migrate command; the application role may not create any. */
+export const QUEUE_SCHEMA = 'jobs';
+
+export const QUEUES = ['build-product-file', 'sweep'] as const;
+export type QueueName = (typeof QUEUES)[number];
+
+export interface JobData {
+	readonly 'build-product-file': { readonly jobId: string; readonly productFileId: string; readonly personId: string };
+	readonly sweep: Record<string, never>;
+}
+
+let starting: Promise<PgBoss> | undefined;
+
+export function startQueue(options: { readonly supervises: boolean }): Promise<PgBoss> {
+	starting ??= (async () => {
+		const boss = new PgBoss({
+			connectionString: config().databaseUrl,
+			schema: QUEUE_SCHEMA,
+			migrate: false,
+			supervise: options.supervises,
+			schedule: options.supervises,
+			max: 3
+		});
+		// Without a listener an error event ends the process.
+		boss.on('error', (error) => console.error(JSON.stringify({ queue: error.message })));
+		await boss.start();
+		return boss;
+	})();
+	return starting;
+}
+
+export async function stopQueue(): Promise<void> {
+	const boss = await starting;
+	starting = undefined;
+	await boss?.stop({ graceful: true, timeout: 5_000 });
+}
+
+/** Puts a job in the queue and its progress row beside it, in the transaction that causes it. */
+export async function enqueue<Q extends QueueName>(
+	trx: Trx,
+	actor: Actor,
+	queue: Q,
+	subject: string,
+	data: Omit<JobData[Q], 'jobId' | 'personId'>
+): Promise<string> {
+	const jobId = newId();
+	await trx
+		.insertInto('job_progress')
+		.values({ job_id: jobId, kind: queue, subject, person_id: actor.personId, state: 'queued' })
+		.execute();
+	const boss = await startQueue({ supervises: false });
+	await boss.send(queue, { ...data, jobId, personId: actor.personId }, {
+		id: jobId,
+		retryLimit: 2,
+		retryBackoff: true,
+		expireInSeconds: 600,
+		db: {
+			executeSql: async (text: string, values: unknown[]) => {
+				const result = await trx.executeQuery(CompiledQuery.raw(text, values));
+				return { rows: [...result.rows], rowCount: result.rows.length };
+			}
+		}
+	});
+	return jobId;
+}

@@ -8,7 +8,6 @@ export type PdfRequest =
 /** One line of JSON on the child's standard error. */
 export type PdfProgress =
 	| { readonly step: 'started' }
-	| { readonly step: 'section'; readonly code: string; readonly done: number; readonly of: number }
 	| { readonly step: 'layout' }
 	| { readonly step: 'pages'; readonly done: number; readonly of: number }
 	| { readonly step: 'failed'; readonly code: string; readonly message: string };

@@ -1,0 +1,70 @@
+/** Every address of the application is built here; no component spells one. */
+
+type Query = Record<string, string | number | null | undefined>;
+
+/** Leaves out what is empty, so that the plain page has the plain address. */
+export function withQuery(path: string, query: Query = {}): string {
+	const params = new URLSearchParams();
+	for (const [name, value] of Object.entries(query)) {
+		if (value !== null && value !== undefined && value !== '') params.set(name, String(value));
+	}
+	const text = params.toString();
+	return text ? `${path}?${text}` : path;
+}
+
+const part = (text: string | number) => encodeURIComponent(String(text));
+const product = (slug: string) => `/products/${part(slug)}`;
+
+export const PRODUCT_PARTS = ['formula', 'composition', 'list', 'claims', 'label', 'file'] as const;
+export type ProductPart = (typeof PRODUCT_PARTS)[number];
+
+export const paths = {
+	signIn: (query?: { next?: string }) => withQuery('/sign-in', query),
+	signOut: () => '/sign-out',
+	preferences: () => '/preferences',
+
+	desk: () => '/desk',
+	products: (query?: Query) => withQuery('/products', query),
+	newProduct: () => '/products/new',
+	product: (slug: string, query?: Query) => withQuery(product(slug), query),
+	productPart: (slug: string, name: ProductPart, query?: Query) => withQuery(`${product(slug)}/${name}`, query),
+	formulaOfProduct: (slug: string, query?: Query) => withQuery(`${product(slug)}/formula`, query),
+	composition: (slug: string, query?: Query) => withQuery(`${product(slug)}/composition`, query),
+	ingredientList: (slug: string, query?: Query) => withQuery(`${product(slug)}/list`, query),
+	claims: (slug: string, query?: Query) => withQuery(`${product(slug)}/claims`, query),
+	claim: (slug: string, claimId: string) => withQuery(`${product(slug)}/claims`, { claim: claimId }),
+	label: (slug: string, query?: Query) => withQuery(`${product(slug)}/label`, query),
+	productFile: (slug: string, query?: Query) => withQuery(`${product(slug)}/file`, query),
+
+	materials: (query?: Query) => withQuery('/materials', query),
+	newMaterial: () => '/materials/new',
+	material: (code: string, query?: Query) => withQuery(`/materials/${part(code)}`, query),
+	materialVersion: (code: string, version: string | number, query?: Query) =>
+		withQuery(`/materials/${part(code)}/${part(version)}`, query),
+
+	formulas: (query?: Query) => withQuery('/formulas', query),
+	newFormula: () => '/formulas/new',
+	formula: (code: string, query?: Query) => withQuery(`/formulas/${part(code)}`, query),
+	formulaVersion: (code: string, version: string | number, query?: Query) =>
+		withQuery(`/formulas/${part(code)}/${part(version)}`, query),
+
+	evidence: (query?: Query) => withQuery('/evidence', query),
+	evidenceItem: (id: string, query?: Query) => withQuery(`/evidence/${part(id)}`, query),
+	evidencePage: (id: string, page: number) => `/evidence/${part(id)}#page=${page}`,
+
+	rules: (query?: Query) => withQuery('/rules', query),
+	act: (act: string) => `/rules/${part(act)}`,
+	rule: (act: string, entry: string) => `/rules/${part(act)}/${part(entry)}`,
+	audit: (stream: string, seq: string | number) => `/audit/${part(stream)}/${part(seq)}`,
+
+	counter: () => '/counter',
+	counterProduct: (slug: string, query?: Query) => withQuery(`/counter/${part(slug)}`, query),
+
+	api: {
+		uploads: () => '/api/uploads',
+		upload: (id: string) => `/api/uploads/${part(id)}`,
+		uploadPart: (id: string, number: number) => `/api/uploads/${part(id)}/parts/${number}`,
+		uploadComplete: (id: string) => `/api/uploads/${part(id)}/complete`,
+		job: (id: string) => `/api/jobs/${part(id)}`
+	}
+} as const;

@@ -10,6 +10,7 @@ export const shell = {
 	preparedBy: (workspace: string) => `prepared by ${workspace}`,
 	clientFoot: 'Costmary computes and documents; it compares words and figures and judges no picture or colour.',
 	theme: { label: 'Theme', light: 'Light', dark: 'Dark', system: 'System' },
+	place: 'Place',
 	margin: 'Margin',
 	openMargin: 'Open the margin',
 	closeMargin: 'Close the margin',

@@ -19,6 +19,8 @@ export default {
 				'default-src': ['self'],
 				'script-src': ['self'],
 				'style-src': ['self'],
+				// The one style attribute of the framework's own route announcer, set in the browser.
+				'style-src-attr': ['unsafe-hashes', 'sha256-S8qMpvofolR8Mpjy4kQvEm7m1q8clzU4dfDH0AmvZjo='],
 				'img-src': ['self', 'data:'],
 				'font-src': ['self'],
 				'connect-src': ['self'],

@@ -41,6 +41,8 @@ const FOLDERS = [
 	['src/lib/server/', 'server'],
 	['src/lib/ui/', 'ui'],
 	['src/routes/', 'routes'],
+	// The one stylesheet is part of the look; the root layout takes it in.
+	['src/app.css', 'ui'],
 	['src/', 'entry'],
 	['templates/', 'templates'],
 	['migrations/', 'migrations'],

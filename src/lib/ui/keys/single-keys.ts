@@ -11,8 +11,7 @@ export const GO_KEYS: Readonly<Record<string, WorkspacePlace>> = {
 };
 
 export type KeyDeed =
-	| { readonly deed: 'search' | 'edit' | 'help' | 'wait' }
-	| { readonly deed: 'go'; readonly place: WorkspacePlace };
+	{ readonly deed: 'search' | 'edit' | 'help' | 'wait' } | { readonly deed: 'go'; readonly place: WorkspacePlace };
 
 /** What a single key does; `waiting` after a `g`. Null when it does nothing. */
 export function keyDeed(key: string, waiting: boolean): KeyDeed | null {

@@ -3,7 +3,10 @@ import { describe, expect, test } from 'vitest';
 import { diffTexts } from './diff';
 
 const text = (parts: ReturnType<typeof diffTexts>, kind: 'added' | 'removed') =>
-	parts.filter((part) => part.kind === 'same' || part.kind === kind).map((part) => part.text).join('');
+	parts
+		.filter((part) => part.kind === 'same' || part.kind === kind)
+		.map((part) => part.text)
+		.join('');
 
 describe('what became of a text', () => {
 	test('a name that came is marked', () => {

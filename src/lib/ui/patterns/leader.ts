@@ -26,6 +26,8 @@ const ROW = "tr[aria-current='true'], [data-leader-from='true']";
 const NODE = '[data-trail-node]';
 const BEYOND = 12;
 const GAP = 2;
+/** The leaf hangs this far before its node. */
+const LEAF_HANG = 20.5;
 
 /** Reads the ends from the page; null when the margin does not stand beside the sheet or one end is missing. */
 export function leaderEnds(book: HTMLElement): LeaderEnds | null {
@@ -41,7 +43,7 @@ export function leaderEnds(book: HTMLElement): LeaderEnds | null {
 		fromX: round(Math.min(line.right, page.right) - origin.left),
 		fromY: round(line.bottom - origin.top - 0.5),
 		turnX: round(page.right - origin.left + BEYOND),
-		toX: round(leaf.left - origin.left - GAP),
+		toX: round(leaf.left - origin.left - LEAF_HANG - GAP),
 		toY: round(leaf.top - origin.top + 10)
 	};
 }

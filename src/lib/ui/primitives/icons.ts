@@ -36,12 +36,18 @@ export const ICONS = {
 	more: line('M2.5 4h11M2.5 8h11M2.5 12h11'),
 	margin: line('M2 2.500h12v11H2zM10 2.500v11'),
 	file: line('M4 1.8h5.500L12.5 5v9.200H4zM9 2v3.500h3.5'),
+	composition: line('M3 1.8h4v12.4H3zM3 9h4M3 11.8h4M10 4h3.5M10 9h3.5M10 12h3.5'),
+	list: line('M5.5 3.5h8.5M5.5 8h8.500M5.5 12.5h8.500M2 3.500h.1M2 8h.1M2 12.500h.1'),
+	claims: line('M2 2.500h12v8.500H8L4.5 14v-3H2zM5 5.500h6M5 8h4'),
+	label: line('M2 2.500h5.500L14 9l-5 5-7-6.500zM5 5.500h.1'),
 	desk: line('M2 5.500h12M3.5 5.500v8M12.5 5.500v8M9 5.500V9h3.5'),
 	products: line('M5.5 1.800h5v3h-5zM4 4.800h8v9.400H4zM4 9h8'),
 	materials: line('M6 1.800h4M6.8 1.800v4L3 13.2a.8.8 0 0 0 .8 1h8.400a.8.8 0 0 0 .8-1L9.2 5.800v-4M4.8 10.200h6.4'),
 	formulas: line('M2.5 3h11M2.5 6.300h11M2.5 9.700h7M2.5 13h7M11.5 9.700v3.6'),
 	evidence: line('M4 1.8h8v12.4H4zM6.5 5h3M6.5 7.500h3M6.5 10h2'),
-	rules: line('M8 3.500C6.5 2.3 4.5 2 2 2v10.500c2.5 0 4.5.3 6 1.5 1.5-1.2 3.5-1.5 6-1.500V2c-2.5 0-4.5.3-6 1.500ZM8 3.500V14'),
+	rules: line(
+		'M8 3.500C6.5 2.3 4.5 2 2 2v10.500c2.5 0 4.5.3 6 1.5 1.5-1.2 3.5-1.5 6-1.500V2c-2.5 0-4.5.3-6 1.500ZM8 3.500V14'
+	),
 
 	leafReady: [{ d: LEAF, filled: true }, { d: LEAF }],
 	leafIncomplete: [{ d: LEAF }, { d: 'M8 1.4v13.2C3.4 10.2 3.6 5 8 1.4Z', filled: true }],
@@ -56,11 +62,10 @@ export const ICONS = {
 	changesOn: [{ d: 'M3 1.8v12.4', dash: '1.5 2.5' }, { d: 'M13 1.8v12.4M5.5 8H10M8.2 6l2 2-2 2' }],
 	notPermitted: line(`${SQUARE}M2.5 13.5l11-11`),
 	notInRuleBook: [{ d: SQUARE, dash: '2 2.2' }, { d: 'M6 6.2a2 2 0 1 1 2 2.2v.8M8 11.2v.1' }],
-	trace: [
-		{ d: 'M11.5 1.8v12.4' },
-		{ d: `${dot(4, 5, 1)}${dot(7, 8, 1)}${dot(4, 11, 1)}`, filled: true }
-	],
-	readTheEntry: line('M8 4C6.5 2.8 4.5 2.5 2 2.500V12.500c2.5 0 4.5.3 6 1.5 1.5-1.2 3.5-1.5 6-1.500V2.500c-2.5 0-4.5.3-6 1.500ZM8 4v10'),
+	trace: [{ d: 'M11.5 1.8v12.4' }, { d: `${dot(4, 5, 1)}${dot(7, 8, 1)}${dot(4, 11, 1)}`, filled: true }],
+	readTheEntry: line(
+		'M8 4C6.5 2.8 4.5 2.5 2 2.500V12.500c2.5 0 4.5.3 6 1.5 1.5-1.2 3.5-1.5 6-1.500V2.500c-2.5 0-4.5.3-6 1.500ZM8 4v10'
+	),
 
 	supported: [{ d: BLOCK, filled: true }, { d: BLOCK }, { d: 'M1.5 13h13', width: 2 }],
 	conditional: [{ d: BLOCK, filled: true }, { d: BLOCK }, { d: 'M1.5 13h13', width: 2, dash: '2.4 3' }],

@@ -19,7 +19,12 @@ describe('decimals', () => {
 		{ why: 'the comma of the person', value: '0.0012', sign: ',' as const, read: '0,0012' },
 		{ why: 'a whole number has no sign', value: '100', sign: ',' as const, read: '100' },
 		{ why: 'minus is a minus, not a hyphen', value: '-0.50', sign: '.' as const, read: '−0.50' },
-		{ why: 'more digits than a float holds', value: '12345678901234567890.123456789', sign: '.' as const, read: '12345678901234567890.123456789' },
+		{
+			why: 'more digits than a float holds',
+			value: '12345678901234567890.123456789',
+			sign: '.' as const,
+			read: '12345678901234567890.123456789'
+		},
 		{ why: 'text is given back', value: 'q.s.', sign: ',' as const, read: 'q.s.' }
 	])('$why', ({ value, sign, read }) => expect(formatDecimal(value, sign)).toBe(read));
 

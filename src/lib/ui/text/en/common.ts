@@ -54,8 +54,7 @@ export const common = {
 		progressOf: (name: string) => `Upload of ${name}`
 	},
 	progress: {
-		count: (done: number, all: number, sign: DecimalSign) =>
-			`${formatCount(done, sign)} of ${formatCount(all, sign)}`,
+		count: (done: number, all: number, sign: DecimalSign) => `${formatCount(done, sign)} of ${formatCount(all, sign)}`,
 		leave: 'You may leave; the result waits on your desk.',
 		waiting: 'Waiting for its turn.',
 		done: 'Finished.',

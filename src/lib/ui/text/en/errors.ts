@@ -21,7 +21,8 @@ const refused: Record<string, (data: Data) => string> = {
 		`${said(data, 'name', 'The file')} is larger than the limit of ${said(data, 'limit', '250 MiB')}. Nothing was stored.`,
 	'file-empty': (data) => `${said(data, 'name', 'The file')} has 0 bytes. Choose a file that holds something.`,
 	'upload-broken': () => 'The upload was cut off and nothing was kept. Send the file again.',
-	'kind-not-taken': (data) => `${said(data, 'kind', 'This kind of file')} is not taken here. Send a PDF, an image or a table.`
+	'kind-not-taken': (data) =>
+		`${said(data, 'kind', 'This kind of file')} is not taken here. Send a PDF, an image or a table.`
 };
 
 export const errors = {

@@ -4,6 +4,12 @@ import type { FileFault } from './rules';
 
 export type UploadState = 'refused' | 'waiting' | 'sending' | 'finishing' | 'done' | 'failed' | 'cancelled';
 
+/** Why an upload failed: a refusal by code, the server's own sentence, or a server that could not be reached. */
+export type UploadProblem =
+	| { readonly kind: 'refused'; readonly code: string; readonly data: Readonly<Record<string, unknown>> }
+	| { readonly kind: 'said'; readonly text: string }
+	| { readonly kind: 'lost' };
+
 /** One file on its way. `result` is what `complete` answered. */
 export class Upload<Result = unknown> {
 	readonly key: number;
@@ -11,8 +17,7 @@ export class Upload<Result = unknown> {
 	state = $state<UploadState>('waiting');
 	sent = $state(0);
 	fault = $state<FileFault | null>(null);
-	/** The server's own sentence or code, or 'lost' where it could not be reached. */
-	problem = $state<string | null>(null);
+	problem = $state.raw<UploadProblem | null>(null);
 	result = $state.raw<Result | null>(null);
 	id: string | null = null;
 	readonly abort = new AbortController();
@@ -34,18 +39,26 @@ export class Upload<Result = unknown> {
 	}
 }
 
-class Problem extends Error {}
+class Failed extends Error {
+	constructor(readonly problem: UploadProblem) {
+		super(problem.kind);
+	}
+}
 
-/** The sentence of a problem+json answer or of a refusal; the status where neither speaks. */
-async function problemOf(response: Response): Promise<string> {
+const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null;
+
+/** Reads a refusal (`code`, `data`) or the sentence of a problem+json answer; the status where neither speaks. */
+async function problemOf(response: Response): Promise<UploadProblem> {
 	const body: unknown = await response.json().catch(() => null);
-	if (typeof body === 'object' && body !== null) {
-		for (const name of ['detail', 'title', 'message'] as const) {
-			const text = (body as Record<string, unknown>)[name];
-			if (typeof text === 'string' && text !== '') return text;
+	if (isRecord(body)) {
+		if (typeof body.code === 'string') {
+			return { kind: 'refused', code: body.code, data: isRecord(body.data) ? body.data : {} };
+		}
+		for (const text of [body.detail, body.title, body.message]) {
+			if (typeof text === 'string' && text !== '') return { kind: 'said', text };
 		}
 	}
-	return String(response.status);
+	return { kind: 'said', text: String(response.status) };
 }
 
 interface Opened {
@@ -133,7 +146,7 @@ export class Uploader<Result = unknown> {
 		} catch (thrown) {
 			if (upload.abort.signal.aborted) return;
 			upload.state = 'failed';
-			upload.problem = thrown instanceof Problem ? thrown.message : 'lost';
+			upload.problem = thrown instanceof Failed ? thrown.problem : { kind: 'lost' };
 			await this.#discard(upload);
 		}
 	}
@@ -164,7 +177,7 @@ export class Uploader<Result = unknown> {
 				continue;
 			}
 			if (response.ok) return response;
-			throw new Problem(await problemOf(response));
+			throw new Failed(await problemOf(response));
 		}
 	}
 

@@ -87,7 +87,7 @@ describe('an upload', () => {
 		});
 		const uploader = new Uploader({ purpose: 'evidence', fetch });
 		await uploader.start([file('report.pdf', 10)]);
-		expect(uploader.uploads[0]).toMatchObject({ state: 'failed', problem: 'lost' });
+		expect(uploader.uploads[0]).toMatchObject({ state: 'failed', problem: { kind: 'lost' } });
 		expect(calls.at(-1)).toBe('DELETE /api/uploads/u1');
 	});
 	test('a refusal by the server is told in its own words and not tried again', async () => {
@@ -96,8 +96,18 @@ describe('an upload', () => {
 		);
 		const uploader = new Uploader({ purpose: 'evidence', fetch });
 		await uploader.start([file('report.pdf', 3)]);
-		expect(uploader.uploads[0]?.problem).toBe('report.pdf is too large.');
+		expect(uploader.uploads[0]?.problem).toEqual({ kind: 'said', text: 'report.pdf is too large.' });
 		expect(calls.filter((call) => call.startsWith('PUT'))).toHaveLength(1);
+	});
+	test('a refusal by code keeps its data for the sentence', async () => {
+		const { fetch } = server(() => answer({ message: 'x', code: 'file-too-large', data: { limit: '250 MiB' } }, 413));
+		const uploader = new Uploader({ purpose: 'evidence', fetch });
+		await uploader.start([file('report.pdf', 3)]);
+		expect(uploader.uploads[0]?.problem).toEqual({
+			kind: 'refused',
+			code: 'file-too-large',
+			data: { limit: '250 MiB' }
+		});
 	});
 	test('cancelling stops it, throws away what was sent, and the next file goes on', async () => {
 		const gate = deferred<Response>();

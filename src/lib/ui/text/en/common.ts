@@ -50,6 +50,7 @@ export const common = {
 		lost: 'The connection was lost. Nothing was kept.',
 		failed: (why: string) => `Not stored: ${why}`,
 		cancelOf: (name: string) => `Cancel ${name}`,
+		removeOf: (name: string) => `Remove ${name} from this list`,
 		retryOf: (name: string) => `Try ${name} again`,
 		progressOf: (name: string) => `Upload of ${name}`
 	},

@@ -59,10 +59,12 @@ function hold(processes, folder) {
 }
 
 /** @param {import('./lib/postgres.mjs').Cluster} cluster */
-const databaseVariables = (cluster) => ({
-	DATABASE_URL: cluster.url('application', DATABASE),
-	DATABASE_OWNER_URL: cluster.url('owner', DATABASE)
-});
+function databaseVariables(cluster) {
+	return {
+		DATABASE_URL: cluster.url('application', DATABASE),
+		DATABASE_OWNER_URL: cluster.url('owner', DATABASE)
+	};
+}
 
 /**
  * @param {import('./lib/processes.mjs').Processes} processes
@@ -113,7 +115,8 @@ function announce(address, folder, local) {
 	for (const { email, password, role, roles } of accounts) {
 		say(`  ${email.padEnd(width)}  ${password}  ${roles?.join(', ') ?? role ?? ''}`);
 	}
-	say(`${accounts.length > 0 ? '\n' : ''}Ctrl-C ends it. Data: ${path.relative(process.cwd(), folder) || folder}`);
+	const near = path.relative(process.cwd(), folder);
+	say(`${accounts.length > 0 ? '\n' : ''}Ctrl-C ends it. Data: ${near.startsWith('..') ? folder : near}`);
 }
 
 /**

@@ -50,6 +50,11 @@ export class Processes {
 		this.#cleanups.push(cleanup);
 	}
 
+	/** Runs after every cleanup. @param {() => unknown} last */
+	atVeryEnd(last) {
+		this.#cleanups.unshift(last);
+	}
+
 	/** @param {Order} order */
 	start(order) {
 		if (this.#ending) throw new Stop('Stopped.');
@@ -110,6 +115,12 @@ export class Processes {
 	async end(child) {
 		const entry = child.pid === undefined ? undefined : this.#running.get(child.pid);
 		if (child.pid !== undefined && entry) await endProcess(endingOf(child.pid, entry.order));
+	}
+
+	/** Ends the child that was started last. */
+	async endNewest() {
+		const newest = [...this.#running.values()].at(-1);
+		if (newest) await this.end(newest.child);
 	}
 
 	/** Ends all children and runs the cleanups; a second call waits for the first. */

@@ -25,7 +25,7 @@ export interface CompositionRequest {
 	readonly materials: ReadonlyMap<Id<'material'>, MaterialVersion>;
 }
 
-/** One weighed line's part in a row. `weight` is the line's share of the whole formula, in 10⁻⁶ % × 10^(8·depth) ÷ … see compose. */
+/** One weighed line's part in a row. Figures stand on the composition's own scale (see Composition). */
 export interface Contribution {
 	/** From the outer formula's line to the line that weighs the material. */
 	readonly path: readonly Id<'line'>[];
@@ -40,7 +40,7 @@ export interface Contribution {
 	readonly part: Estimate<PartShare>;
 	readonly share: Estimate<Percent>;
 }
-/** A weight in the whole formula; the same scale as LineShare, one line deep or many. */
+/** A material's weight in the whole formula, on the composition's own scale. */
 export type Weight = LineShare;
 
 export interface CompositionRow {
@@ -61,8 +61,15 @@ export interface WeighedMaterial {
 	readonly parts: readonly { readonly rowKey: string; readonly constituent: Id<'constituent'>; readonly inSum: boolean; readonly share: Estimate<PartShare> }[];
 }
 
+/**
+ * Without bulks a share is in 10⁻¹⁶ % and a weight in 10⁻⁶ %. Each level of bulk in bulk multiplies by a further 10⁻⁸,
+ * so that nothing is ever rounded: read every share with `shareDecimals` and every weight with `weightDecimals`.
+ */
 export interface Composition {
 	readonly formula: Id<'formula'>;
+	readonly levels: number;
+	readonly shareDecimals: number;
+	readonly weightDecimals: number;
 	readonly rows: readonly CompositionRow[];
 	readonly weighed: readonly WeighedMaterial[];
 	/** Raised when the way of computing changes, so that stored readings can tell. */

@@ -82,6 +82,8 @@ export interface ThresholdQuestion {
 
 export interface IngredientList {
 	readonly market: ListMarket;
+	/** Decimals of every share in this list; the composition's own scale. */
+	readonly shareDecimals: number;
 	readonly entries: readonly ListEntry[];
 	readonly text: string;
 	readonly weak: readonly WeakPair[];

@@ -16,7 +16,7 @@ const eslint = new ESLint({
 		...svelte.configs.base,
 		{ files: ['**/*.svelte'], languageOptions: { parserOptions: { parser: ts.parser } } },
 		...houseRules
-	] as ESLint.Options['overrideConfig']
+	]
 });
 
 async function faultsOf(file: string, code: string): Promise<string[]> {

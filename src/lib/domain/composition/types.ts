@@ -3,7 +3,12 @@ import type { Estimate } from '../quantity/range';
 import type { Id, LineShare, PartShare, Percent } from '../quantity/units';
 
 export type LineAmount =
-	| { readonly kind: 'share'; readonly min: LineShare | null; readonly share: LineShare; readonly max: LineShare | null }
+	| {
+			readonly kind: 'share';
+			readonly min: LineShare | null;
+			readonly share: LineShare;
+			readonly max: LineShare | null;
+	  }
 	| { readonly kind: 'qs' };
 
 /** A line names a material or another formula, not a version: the caller's basis says which version answers. */
@@ -11,7 +16,10 @@ export type FormulaLine = {
 	readonly id: Id<'line'>;
 	readonly phase: string;
 	readonly amount: LineAmount;
-} & ({ readonly material: Id<'material'>; readonly formula?: undefined } | { readonly formula: Id<'formula'>; readonly material?: undefined });
+} & (
+	| { readonly material: Id<'material'>; readonly formula?: undefined }
+	| { readonly formula: Id<'formula'>; readonly material?: undefined }
+);
 
 export interface FormulaVersionLines {
 	readonly formula: Id<'formula'>;
@@ -53,12 +61,23 @@ export interface CompositionRow {
 	readonly contributions: readonly Contribution[];
 }
 
-/** A material's weight in the whole formula and its constituents: what bounds and order strength are computed from. */
+/** One constituent of a weighed material; what bounds and order strength are computed from. */
+export interface WeighedPart {
+	readonly rowKey: string;
+	readonly constituent: Id<'constituent'>;
+	readonly substance: Id<'substance'>;
+	readonly role: PartRole | 'ofWhich';
+	readonly parent: Id<'constituent'> | null;
+	readonly share: Estimate<PartShare>;
+}
+/** One material version has one composition in a formula, however many lines and bulks carry it: weights are added first. */
 export interface WeighedMaterial {
 	readonly material: Id<'material'>;
 	readonly version: Id<'materialVersion'>;
-	readonly weight: Estimate<Weight>;
-	readonly parts: readonly { readonly rowKey: string; readonly constituent: Id<'constituent'>; readonly inSum: boolean; readonly share: Estimate<PartShare> }[];
+	readonly typicalWeight: Weight;
+	/** The weight at every corner of the range lines' box; without range lines one figure, the typical. */
+	readonly corners: readonly Weight[];
+	readonly parts: readonly WeighedPart[];
 }
 
 /**
@@ -86,4 +105,9 @@ export type CompositionFault =
 	| { readonly kind: 'rangeUpsideDown'; readonly formula: Id<'formula'>; readonly line: Id<'line'> }
 	| { readonly kind: 'sumAbove100'; readonly formula: Id<'formula'>; readonly by: LineShare }
 	| { readonly kind: 'sumBelow100'; readonly formula: Id<'formula'>; readonly by: LineShare }
-	| { readonly kind: 'material'; readonly material: Id<'material'>; readonly version: Id<'materialVersion'>; readonly fault: MaterialFault };
+	| {
+			readonly kind: 'material';
+			readonly material: Id<'material'>;
+			readonly version: Id<'materialVersion'>;
+			readonly fault: MaterialFault;
+	  };

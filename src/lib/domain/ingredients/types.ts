@@ -66,7 +66,12 @@ export interface WeakPair {
 	readonly before: string;
 	readonly after: string;
 	readonly strength: Strength;
-	readonly turnsAt: { readonly material: Id<'material'>; readonly constituent: Id<'constituent'>; readonly substance: Id<'substance'>; readonly at: Ratio } | null;
+	readonly turnsAt: {
+		readonly material: Id<'material'>;
+		readonly constituent: Id<'constituent'>;
+		readonly substance: Id<'substance'>;
+		readonly at: Ratio;
+	} | null;
 	readonly ask: Id<'material'> | null;
 }
 /** A threshold that the ranges straddle, so that it cannot be told yet whether a name is printed. */

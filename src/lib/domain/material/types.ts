@@ -37,8 +37,6 @@ export interface MaterialVersion {
 
 export interface ResolvedPart {
 	readonly of: Constituent;
-	/** Every constituent merged into this row, `of` among them. */
-	readonly merged: readonly Id<'constituent'>[];
 	readonly share: Estimate<PartShare>;
 }
 /** Tightened by the sum; the only form that composition accepts. */

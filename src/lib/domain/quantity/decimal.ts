@@ -1,6 +1,7 @@
 import { compare } from './units';
 
-export type DecimalFault = 'empty' | 'notANumber' | 'grouping' | 'negative' | 'tooManyDecimals' | 'tooLong' | 'aboveMost';
+export type DecimalFault =
+	'empty' | 'notANumber' | 'grouping' | 'negative' | 'tooManyDecimals' | 'tooLong' | 'aboveMost';
 export type ParsedDecimal =
 	| { readonly ok: true; readonly value: bigint }
 	| { readonly ok: false; readonly why: DecimalFault; readonly limit: string | null };

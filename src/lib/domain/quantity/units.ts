@@ -37,7 +37,8 @@ export const most = <Q extends bigint>(a: Q, b: Q): Q => (a > b ? a : b);
 export const share = (weight: LineShare, part: PartShare) => (weight * part) as Percent;
 
 /** What a computation gives: a value, or the faults of the trade that prevent one. Faults are data, never thrown. */
-export type Outcome<T, F> = { readonly ok: true; readonly value: T } | { readonly ok: false; readonly faults: readonly F[] };
+export type Outcome<T, F> =
+	{ readonly ok: true; readonly value: T } | { readonly ok: false; readonly faults: readonly F[] };
 export const good = <T>(value: T): { readonly ok: true; readonly value: T } => ({ ok: true, value });
 export const faulty = <F>(...faults: readonly F[]): { readonly ok: false; readonly faults: readonly F[] } => ({
 	ok: false,

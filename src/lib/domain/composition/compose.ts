@@ -1,0 +1,242 @@
+import { jointBounds } from '../material/bounds';
+import { resolveMaterial } from '../material/resolve';
+import type { ResolvedMaterial } from '../material/types';
+import { weakest, type Estimate, type TypicalBasis } from '../quantity/range';
+import {
+	good,
+	LINE_DECIMALS,
+	PERCENT_DECIMALS,
+	type Id,
+	type LineShare,
+	type Outcome,
+	type PartShare,
+	type Percent
+} from '../quantity/units';
+import { expand, type Leaf } from './expand';
+import { corners, judgeAmounts, sharesOf, type Shares } from './lines';
+import type {
+	Composition,
+	CompositionFault,
+	CompositionRequest,
+	CompositionRow,
+	Contribution,
+	WeighedMaterial,
+	WeighedPart
+} from './types';
+
+/** Raised when the way of computing changes. */
+const ENGINE = 1;
+const PER_LEVEL = 8;
+
+/**
+ * What a formula consists of, by substance, nano form and use: typical, lowest and highest share and every contribution.
+ * Materials and bulks at any depth are multiplied out exactly; nothing is rounded (see Composition for the scale).
+ * Faults: what is missing, a cycle with its path, a sum that is not exactly 100, a material that contradicts itself.
+ */
+export function compose(request: CompositionRequest): Outcome<Composition, CompositionFault> {
+	const expanded = expand(request);
+	if (!expanded.ok) return expanded;
+	const { leaves, formulas, levels } = expanded.value;
+	const amounts = judgeAmounts(formulas);
+	if (amounts.length > 0) return { ok: false, faults: amounts };
+	const materials = resolveAll(request, leaves);
+	if (!materials.ok) return materials;
+
+	const typical = sharesOf(formulas, null);
+	const boxes = corners(formulas);
+	const weigh = (leaf: Leaf, shares: Shares) => weightOf(leaf, shares, levels);
+	const present = leaves.filter((leaf) => boxes.some((shares) => weigh(leaf, shares) > 0n));
+	const weighed = [...materials.value.values()].flatMap((material) =>
+		weighMaterial(material, present, typical, boxes, weigh)
+	);
+	const contributions = present.flatMap((leaf) =>
+		contribute(leaf, materials.value.get(leaf.material), typical, boxes, weigh)
+	);
+	return good({
+		formula: request.formula,
+		levels,
+		shareDecimals: PERCENT_DECIMALS + PER_LEVEL * levels,
+		weightDecimals: LINE_DECIMALS + PER_LEVEL * levels,
+		rows: rowsOf(contributions, weighed),
+		weighed,
+		engine: ENGINE
+	});
+}
+
+export const rowKey = (part: { substance: string; nano: boolean; use: string }) =>
+	`${part.substance}|${part.nano ? 'nano' : ''}|${part.use}`;
+
+function resolveAll(
+	request: CompositionRequest,
+	leaves: readonly Leaf[]
+): Outcome<ReadonlyMap<Id<'material'>, ResolvedMaterial>, CompositionFault> {
+	const found = new Map<Id<'material'>, ResolvedMaterial>();
+	const faults: CompositionFault[] = [];
+	for (const material of new Set(leaves.map((leaf) => leaf.material))) {
+		const version = request.materials.get(material);
+		if (!version) {
+			faults.push({ kind: 'materialMissing', material });
+			continue;
+		}
+		const outcome = resolveMaterial(version);
+		if (outcome.ok) found.set(material, outcome.value);
+		else {
+			faults.push(
+				...outcome.faults.map((fault) => ({ kind: 'material', material, version: version.id, fault }) as const)
+			);
+		}
+	}
+	return faults.length > 0 ? { ok: false, faults } : good(found);
+}
+
+/** The product of the shares along the path, on the composition's weight scale. */
+function weightOf(leaf: Leaf, shares: Shares, levels: number): LineShare {
+	const product = leaf.path.reduce((total, line) => total * (shares.get(line) ?? 0n), 1n);
+	const missingLevels = levels - (leaf.path.length - 1);
+	return (product * 10n ** BigInt(PER_LEVEL * missingLevels)) as LineShare;
+}
+
+type Weigh = (leaf: Leaf, shares: Shares) => LineShare;
+
+function weighMaterial(
+	material: ResolvedMaterial,
+	leaves: readonly Leaf[],
+	typical: Shares,
+	boxes: readonly Shares[],
+	weigh: Weigh
+): WeighedMaterial[] {
+	const own = leaves.filter((leaf) => leaf.material === material.material);
+	if (own.length === 0) return [];
+	const total = (shares: Shares) => own.reduce((sum, leaf) => sum + weigh(leaf, shares), 0n) as LineShare;
+	return [
+		{
+			material: material.material,
+			version: material.version,
+			typicalWeight: total(typical),
+			corners: boxes.map(total),
+			parts: material.parts.map((part): WeighedPart => ({
+				rowKey: rowKey(part.of),
+				constituent: part.of.id,
+				substance: part.of.substance,
+				role: part.of.place === 'inSum' ? part.of.role : 'ofWhich',
+				parent: part.of.place === 'ofWhich' ? part.of.parent : null,
+				share: part.share
+			}))
+		}
+	];
+}
+
+const extremes = (values: readonly bigint[]) => ({
+	low: values.reduce((a, b) => (a < b ? a : b)),
+	high: values.reduce((a, b) => (a > b ? a : b))
+});
+
+function contribute(
+	leaf: Leaf,
+	material: ResolvedMaterial | undefined,
+	typical: Shares,
+	boxes: readonly Shares[],
+	weigh: Weigh
+): readonly (Contribution & { readonly rowKey: string; readonly row: CompositionRowIdentity })[] {
+	if (!material) return [];
+	const bounds = extremes(boxes.map((shares) => weigh(leaf, shares)));
+	const weight: Estimate<LineShare> = {
+		low: bounds.low as LineShare,
+		high: bounds.high as LineShare,
+		highOpen: false,
+		typical: weigh(leaf, typical),
+		basis: 'declared'
+	};
+	return material.parts.map((part) => ({
+		path: leaf.path,
+		formulas: leaf.formulas,
+		material: leaf.material,
+		materialVersion: material.version,
+		constituent: part.of.id,
+		ofWhich: part.of.place === 'ofWhich',
+		role: part.of.place === 'inSum' ? part.of.role : 'ofWhich',
+		weight,
+		part: part.share,
+		share: {
+			low: (weight.low * part.share.low) as Percent,
+			high: (weight.high * part.share.high) as Percent,
+			highOpen: part.share.highOpen,
+			typical: (weight.typical * part.share.typical) as Percent,
+			basis: part.share.basis
+		},
+		rowKey: rowKey(part.of),
+		row: { substance: part.of.substance, nano: part.of.nano, use: part.of.use }
+	}));
+}
+
+type CompositionRowIdentity = Pick<CompositionRow, 'substance' | 'nano' | 'use'>;
+
+function rowsOf(
+	contributions: readonly (Contribution & { readonly rowKey: string; readonly row: CompositionRowIdentity })[],
+	weighed: readonly WeighedMaterial[]
+): CompositionRow[] {
+	const grouped = new Map<string, { identity: CompositionRowIdentity; of: Contribution[] }>();
+	for (const { rowKey: key, row, ...contribution } of contributions) {
+		const group = grouped.get(key) ?? { identity: row, of: [] };
+		group.of.push(contribution);
+		grouped.set(key, group);
+	}
+	return [...grouped].map(([key, { identity, of }]) => ({
+		key,
+		...identity,
+		roles: new Set(of.map((contribution) => contribution.role)),
+		share: amountOf(weighed, (part) => part.rowKey === key),
+		contributions: of
+	}));
+}
+
+/**
+ * The share of the selected constituents together: typical, and the lowest and highest that can occur, jointly within each
+ * material and over the corners of the range lines. Materials vary independently of one another.
+ */
+export function amountOf(
+	weighed: readonly WeighedMaterial[],
+	select: (part: WeighedPart) => boolean
+): Estimate<Percent> {
+	const bases: TypicalBasis[] = [];
+	let typical = 0n;
+	let highOpen = false;
+	const perMaterial = weighed.flatMap((material) => {
+		const chosen = material.parts.filter(select);
+		if (chosen.length === 0) return [];
+		for (const part of chosen) {
+			typical += material.typicalWeight * part.share.typical;
+			if (part.share.low !== part.share.high || part.share.basis !== 'derived') bases.push(part.share.basis);
+			highOpen ||= part.share.highOpen;
+		}
+		return [{ corners: material.corners, ...fractionOf(material, select) }];
+	});
+	const count = weighed[0]?.corners.length ?? 0;
+	const at = (corner: number, side: 'low' | 'high') =>
+		perMaterial.reduce((total, material) => total + (material.corners[corner] ?? 0n) * material[side], 0n);
+	const corner = Array.from({ length: count }, (_, index) => index);
+	return {
+		low: extremes([...corner.map((index) => at(index, 'low')), typical]).low as Percent,
+		high: extremes([...corner.map((index) => at(index, 'high')), typical]).high as Percent,
+		highOpen,
+		typical: typical as Percent,
+		basis: weakest(bases)
+	};
+}
+
+/** Lowest and highest share of one material that the selected constituents make up together. */
+function fractionOf(
+	material: WeighedMaterial,
+	select: (part: WeighedPart) => boolean
+): { readonly low: PartShare; readonly high: PartShare } {
+	const inSum = material.parts.filter((part) => part.role !== 'ofWhich');
+	const joint = jointBounds(
+		inSum.map((part) => ({ low: part.share.low, high: part.share.high, chosen: select(part) })),
+		(part) => (part.chosen ? 1n : 0n)
+	) ?? { low: 0n, high: 0n };
+	const inside = material.parts.filter((part) => part.role === 'ofWhich' && select(part));
+	return {
+		low: inside.reduce((total, part) => total + part.share.low, joint.low) as PartShare,
+		high: inside.reduce((total, part) => total + part.share.high, joint.high) as PartShare
+	};
+}

@@ -5,7 +5,7 @@ import type { CompositionFault, FormulaLine, FormulaVersionLines } from './types
 export type Shares = ReadonlyMap<Id<'line'>, LineShare>;
 type Ends = ReadonlyMap<Id<'line'>, 'min' | 'max'>;
 
-/** Beyond this many range lines not every corner is tried: 2¹⁰ corners bound the work. */
+/** 2¹⁰ corners bound the work; nobody adjusts eleven lines at once. */
 const MOST_RANGE_LINES = 10;
 
 const isRange = (line: FormulaLine) =>
@@ -54,7 +54,8 @@ export function judgeAmounts(formulas: readonly FormulaVersionLines[]): Composit
 		const ranged = lines.filter(isRange);
 		const twisted = ranged.filter(isUpsideDown);
 		if (twisted.length > 0) return twisted.map((line) => ({ kind: 'rangeUpsideDown', formula, line: line.id }));
-		if (ranged.length > MOST_RANGE_LINES || (ranged.length > 0 && qs.length === 0)) {
+		if (ranged.length > MOST_RANGE_LINES) return [{ kind: 'tooManyRanges', formula, limit: MOST_RANGE_LINES }];
+		if (ranged.length > 0 && qs.length === 0) {
 			return ranged.map((line) => ({ kind: 'rangeWithoutQs', formula, line: line.id }));
 		}
 		const atMost = new Map(ranged.map((line) => [line.id, 'max'] as const));

@@ -102,6 +102,7 @@ export type CompositionFault =
 	| { readonly kind: 'cycle'; readonly path: readonly Id<'formula'>[] }
 	| { readonly kind: 'severalQs'; readonly formula: Id<'formula'> }
 	| { readonly kind: 'rangeWithoutQs'; readonly formula: Id<'formula'>; readonly line: Id<'line'> }
+	| { readonly kind: 'tooManyRanges'; readonly formula: Id<'formula'>; readonly limit: number }
 	| { readonly kind: 'rangeUpsideDown'; readonly formula: Id<'formula'>; readonly line: Id<'line'> }
 	| { readonly kind: 'sumAbove100'; readonly formula: Id<'formula'>; readonly by: LineShare }
 	| { readonly kind: 'sumBelow100'; readonly formula: Id<'formula'>; readonly by: LineShare }

@@ -20,7 +20,13 @@ function hashed(algorithm: 'sha1' | 'sha256'): Checksum {
 
 function crc32Checksum(): Checksum {
 	let value = 0;
-	return { update: (chunk) => void (value = crc32(chunk, value)), digest: () => bigEndian(value) };
+	return {
+		update(chunk) {
+			// An empty chunk must change nothing, but zlib answers 0 for it and forgets what came before.
+			if (chunk.length > 0) value = crc32(chunk, value);
+		},
+		digest: () => bigEndian(value)
+	};
 }
 
 const CRC32C_TABLE = Uint32Array.from({ length: 256 }, (_, index) => {

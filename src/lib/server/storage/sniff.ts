@@ -21,15 +21,22 @@ function kindInArchive(head: Uint8Array): FileKind | null {
 	return OFFICE_ENTRIES.find(([entry]) => bytes.includes(entry))?.[1] ?? null;
 }
 
-/** The beginning as text, or null when it is none: UTF-8, UTF-16 with its mark, or eight-bit without control codes. */
-function textOf(head: Uint8Array): string | null {
-	const mark =
-		head[0] === 0xff && head[1] === 0xfe ? 'utf-16le' : head[0] === 0xfe && head[1] === 0xff ? 'utf-16be' : null;
-	if (mark !== null) return new TextDecoder(mark).decode(head);
-	const hasControl = head.some(
-		(byte) => byte < 0x20 && byte !== 0x09 && byte !== 0x0a && byte !== 0x0d && byte !== 0x0c
-	);
-	if (hasControl) return null;
+/** Control codes that no text holds; tabs, line ends and form feeds are text. */
+const isControl = (code: number): boolean => code < 0x20 && ![0x09, 0x0a, 0x0c, 0x0d].includes(code);
+
+/** UTF-16 that begins with its mark, or null. */
+function utf16Of(head: Uint8Array): string | null {
+	const [first, second] = head;
+	const encoding =
+		first === 0xff && second === 0xfe ? 'utf-16le' : first === 0xfe && second === 0xff ? 'utf-16be' : null;
+	if (encoding === null) return null;
+	const text = new TextDecoder(encoding).decode(head, { stream: true });
+	return [...text].some((char) => isControl(char.charCodeAt(0)) || char === '\ufffd') ? null : text;
+}
+
+/** UTF-8, or eight bits a character without control codes, or null. */
+function eightBitOf(head: Uint8Array): string | null {
+	if (head.some(isControl)) return null;
 	try {
 		// `stream`: the head may end inside a character.
 		return new TextDecoder('utf-8', { fatal: true }).decode(head, { stream: true });
@@ -63,9 +70,12 @@ function sniffText(text: string, fileName: string): Sniffed {
 
 /** Recognises a file by the beginning of its content (see HEAD_BYTES); the name is only compared with the result. */
 export async function sniff(head: Uint8Array, fileName: string): Promise<Sniffed> {
+	// First, because the mark of UTF-16 is also how some sound files begin.
+	const utf16 = utf16Of(head);
+	if (utf16 !== null) return sniffText(utf16, fileName);
 	const found = await fileTypeFromBuffer(head);
 	if (!found) {
-		const text = textOf(head);
+		const text = eightBitOf(head);
 		return text === null ? { taken: false, found: 'application/octet-stream' } : sniffText(text, fileName);
 	}
 	const kind = found.mime === 'application/zip' ? kindInArchive(head) : kindOfMediaType(found.mime);

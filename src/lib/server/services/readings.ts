@@ -1,0 +1,95 @@
+import { listProjection, type Projection } from '$lib/domain/change/projection';
+import { compose } from '$lib/domain/composition/compose';
+import type { Composition, CompositionFault } from '$lib/domain/composition/types';
+import { ingredientList } from '$lib/domain/ingredients/list';
+import type { IngredientList, SubstanceIdentity } from '$lib/domain/ingredients/types';
+import type { Id, IsoDate } from '$lib/domain/quantity/units';
+import { EU_ALLERGENS } from '$lib/reference';
+import {
+	answeringFormulaVersion,
+	loadMaterials,
+	loadTree,
+	type FormulaVersionRef,
+	type LoadedMaterials,
+	type MaterialVersionRef,
+	type Tree
+} from '../db/basis';
+import type { ProductRow } from '../db/products';
+import type { Trx } from '../db/with-actor';
+import { contentHash, sha256 } from '../hash';
+
+/** Which released versions answer for a product on a day; every reading and every print names it. */
+export interface Basis {
+	readonly batchDay: IsoDate;
+	readonly formulaVersion: FormulaVersionRef;
+	readonly formulaVersions: ReadonlyMap<string, FormulaVersionRef>;
+	readonly materials: ReadonlyMap<string, MaterialVersionRef>;
+	readonly hash: string;
+}
+
+export type Reading =
+	| { readonly kind: 'nothingReleased' }
+	| { readonly kind: 'faults'; readonly basis: Basis; readonly faults: readonly CompositionFault[] }
+	| {
+			readonly kind: 'reading';
+			readonly basis: Basis;
+			readonly tree: Tree;
+			readonly loaded: LoadedMaterials;
+			readonly substances: ReadonlyMap<Id<'substance'>, SubstanceIdentity>;
+			readonly composition: Composition;
+			readonly list: IngredientList;
+	  };
+
+/** Composition and EU list of a product from the versions that answer for it on the batch day. */
+export async function readProduct(trx: Trx, product: ProductRow, batchDay: IsoDate): Promise<Reading> {
+	const version = await answeringFormulaVersion(trx, product.formulaId, product.pinnedVersionId);
+	if (!version) return { kind: 'nothingReleased' };
+	const tree = await loadTree(trx, version);
+	const loaded = await loadMaterials(trx, materialIdsOf(tree), batchDay);
+	const basis = basisOf(version, tree, loaded, batchDay);
+	const outcome = compose({
+		formula: version.formulaId as Id<'formula'>,
+		formulas: tree.formulas,
+		materials: loaded.materials
+	});
+	if (!outcome.ok) return { kind: 'faults', basis, faults: outcome.faults };
+	const list = ingredientList(outcome.value, {
+		market: 'EU',
+		stay: product.stay,
+		batchDay,
+		substances: loaded.substances,
+		allergens: EU_ALLERGENS
+	});
+	return { kind: 'reading', basis, tree, loaded, substances: loaded.substances, composition: outcome.value, list };
+}
+
+const materialIdsOf = (tree: Tree): string[] => [
+	...new Set([...tree.formulas.values()].flatMap(({ lines }) => lines.flatMap((line) => line.material ?? [])))
+];
+
+function basisOf(version: FormulaVersionRef, tree: Tree, loaded: LoadedMaterials, batchDay: IsoDate): Basis {
+	const content = {
+		formulas: [...tree.versions.values()].map((each) => each.id).sort(),
+		materials: [...loaded.refs.values()].map((each) => each.versionId).sort()
+	};
+	return {
+		batchDay,
+		formulaVersion: version,
+		formulaVersions: tree.versions,
+		materials: loaded.refs,
+		hash: contentHash(content)
+	};
+}
+
+export interface HashedProjection extends Projection {
+	readonly hash: string;
+}
+
+/** What a product's EU list rests on now; a list that cannot be made has its own text, so that copies notice. */
+export function projectionOf(reading: Reading): HashedProjection {
+	const projection =
+		reading.kind === 'reading'
+			? listProjection(reading.list)
+			: { kind: 'list', subject: 'EU', rev: 1, text: JSON.stringify({ none: reading.kind }) };
+	return { ...projection, hash: sha256(projection.text) };
+}

@@ -37,7 +37,8 @@ export const languageAndTheme: Handle = ({ event, resolve }) => {
 const SIDES = { '/(bench)/': 'staff', '/(counter)/': 'client' } as const;
 
 export const sideGate: Handle = ({ event, resolve }) => {
-	const group = Object.keys(SIDES).find((prefix) => event.route.id?.startsWith(prefix)) as keyof typeof SIDES | undefined;
+	const group = Object.keys(SIDES).find((prefix) => event.route.id?.startsWith(prefix)) as
+		keyof typeof SIDES | undefined;
 	if (!group) return resolve(event);
 	const { actor } = event.locals;
 	if (!actor) redirect(303, `/sign-in?next=${encodeURIComponent(event.url.pathname + event.url.search)}`);
@@ -52,6 +53,7 @@ export const securityHeaders: Handle = async ({ event, resolve }) => {
 	response.headers.set('referrer-policy', 'same-origin');
 	response.headers.set('cross-origin-opener-policy', 'same-origin');
 	response.headers.set('permissions-policy', 'camera=(), microphone=(), geolocation=()');
-	if (event.locals.actor) response.headers.set('cache-control', response.headers.get('cache-control') ?? 'private, no-store');
+	if (event.locals.actor)
+		response.headers.set('cache-control', response.headers.get('cache-control') ?? 'private, no-store');
 	return response;
 };

@@ -1,0 +1,14 @@
+import { computeInputSchema, type ComputeInput } from '$lib/schemas/compute';
+import { requireAct } from '../access/acts';
+import { orProblem } from './answering';
+import { bearerActor } from './bearer';
+import { jsonBody } from './json-body';
+
+/** One compute endpoint: token, role, body, core, answer. */
+export const computeEndpoint = (compute: (input: ComputeInput) => object) => (request: Request) =>
+	orProblem(async () => {
+		const actor = await bearerActor(request, new Date());
+		if (actor instanceof Response) return actor;
+		requireAct(actor, 'readLaboratory');
+		return Response.json(compute(await jsonBody(request, computeInputSchema)));
+	});

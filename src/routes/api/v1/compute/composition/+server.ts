@@ -1,0 +1,7 @@
+import { computeEndpoint } from '$lib/server/http/compute-endpoint';
+import { computeComposition } from '$lib/server/services/compute';
+import type { RequestHandler } from './$types';
+
+const answer = computeEndpoint(computeComposition);
+
+export const POST: RequestHandler = ({ request }) => answer(request);

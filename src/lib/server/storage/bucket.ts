@@ -8,6 +8,8 @@ import {
 	GetObjectCommand,
 	HeadBucketCommand,
 	HeadObjectCommand,
+	ListMultipartUploadsCommand,
+	ListObjectsV2Command,
 	PutObjectCommand,
 	S3Client,
 	S3ServiceException,
@@ -36,6 +38,17 @@ export interface ObjectContent extends ObjectHead {
 export interface PartRef {
 	readonly number: number;
 	readonly etag: string;
+}
+
+export interface ListedObject {
+	readonly key: string;
+	readonly written: Date;
+}
+
+export interface UnfinishedUpload {
+	readonly key: string;
+	readonly uploadId: string;
+	readonly begun: Date;
 }
 
 export interface Download {
@@ -156,6 +169,22 @@ export class Bucket {
 	async abortParts(key: string, uploadId: string): Promise<void> {
 		const upload = { Bucket: this.#name, Key: key, UploadId: uploadId };
 		await orNull(this.#client.send(new AbortMultipartUploadCommand(upload)));
+	}
+
+	/** Objects below a prefix with the time of their writing; the first thousand, which a sweep may repeat. */
+	async list(prefix: string): Promise<readonly ListedObject[]> {
+		const answer = await this.#client.send(new ListObjectsV2Command({ Bucket: this.#name, Prefix: prefix }));
+		return (answer.Contents ?? []).flatMap(({ Key, LastModified }) =>
+			Key && LastModified ? [{ key: Key, written: LastModified }] : []
+		);
+	}
+
+	/** Uploads under way below a prefix; the first thousand, which a sweep may repeat. */
+	async unfinished(prefix: string): Promise<readonly UnfinishedUpload[]> {
+		const answer = await this.#client.send(new ListMultipartUploadsCommand({ Bucket: this.#name, Prefix: prefix }));
+		return (answer.Uploads ?? []).flatMap(({ Key, UploadId, Initiated }) =>
+			Key && UploadId && Initiated ? [{ key: Key, uploadId: UploadId, begun: Initiated }] : []
+		);
 	}
 
 	/**

@@ -1,0 +1,67 @@
+import { z } from 'zod';
+
+/** What a document is evidence of, in the trade's terms. The sections of the product file ask for these kinds. */
+export const DOCUMENT_KINDS = [
+	'composition',
+	'specification',
+	'certificateOfAnalysis',
+	'safetyDataSheet',
+	'allergenStatement',
+	'perfumeCertificate',
+	'impurityStatement',
+	'toxicologicalProfile',
+	'animalTestingStatement',
+	'packagingStatement',
+	'stabilityReport',
+	'challengeTest',
+	'microbialLimits',
+	'manufacturingMethod',
+	'goodManufacturingPractice',
+	'effectStudy',
+	'toleranceTest',
+	'undesirableEffects',
+	'assessorQualification',
+	'other'
+] as const;
+export type DocumentKind = (typeof DOCUMENT_KINDS)[number];
+
+export const SUBJECT_KINDS = ['material', 'product', 'formula'] as const;
+export type SubjectKind = (typeof SUBJECT_KINDS)[number];
+
+export const TITLE_LIMIT = 300;
+
+/** A calendar day; an empty field means that there is none. */
+const optionalDay = z
+	.union([z.iso.date(), z.literal('')])
+	.nullish()
+	.transform((day) => day || null);
+
+export const subjectSchema = z.object({
+	kind: z.enum(SUBJECT_KINDS),
+	id: z.uuid(),
+	/** The need of the product file that it answers, where it was attached to one. */
+	need: z.string().trim().min(1).max(80).nullish(),
+	/** The version of the formula that a test report was made on. */
+	formulaVersionId: z.uuid().nullish()
+});
+export type DocumentSubject = z.infer<typeof subjectSchema>;
+
+export const documentDetailsSchema = z
+	.object({
+		kind: z.enum(DOCUMENT_KINDS),
+		title: z.string().trim().min(1).max(TITLE_LIMIT),
+		dated: optionalDay,
+		expires: optionalDay,
+		supersedes: z.uuid().nullish(),
+		subjects: z.array(subjectSchema).max(50).default([])
+	})
+	.refine(({ dated, expires }) => dated === null || expires === null || expires >= dated, {
+		path: ['expires'],
+		message: 'expires before its own date'
+	});
+export type DocumentDetails = z.infer<typeof documentDetailsSchema>;
+
+export const fileAddressSchema = z.object({ id: z.uuid() });
+
+/** Shown in the browser only when asked for; anything else downloads. */
+export const fileQuerySchema = z.object({ as: z.enum(['inline', 'attachment']).catch('attachment') });

@@ -1,0 +1,147 @@
+import type { DocumentDetails, DocumentSubject, SubjectKind } from '$lib/schemas/document';
+import type { ListQuery, Page } from '$lib/schemas/paging';
+import { requireAct } from '../access/acts';
+import type { Actor } from '../access/actor';
+import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
+import {
+	documentById,
+	documentsOf,
+	insertDocument,
+	insertLink,
+	linksOf,
+	listDocuments,
+	lockLink,
+	requireSubject,
+	withdrawLink,
+	type DocumentRow,
+	type FileFacts,
+	type LinkRow
+} from '../db/documents';
+import { uploadById } from '../db/uploads';
+import { withActor, type Trx } from '../db/with-actor';
+import { Refused } from '../refused';
+import { bucket } from '../storage/bucket';
+import type { Disposition } from '../storage/disposition';
+import { kindOfMediaType, nameFits, nameForKind } from '../storage/kinds';
+
+/** Long enough to be followed at once, too short to be passed on. */
+const DOWNLOAD_SECONDS = 60;
+
+/** What is said of a file beside its name. */
+export interface FileRemarks {
+	/** Its name promises another kind than its content has; it is kept, and sent back, under the true one. */
+	readonly renamed: boolean;
+	readonly trueName: string;
+	/** Whether it can be bound into a product file: a PDF that opens and restricts nothing. */
+	readonly bindable: boolean;
+}
+
+export type DocumentView = DocumentRow & FileRemarks;
+
+export function remarksOn(facts: FileFacts, fileName: string): FileRemarks {
+	const kind = kindOfMediaType(facts.mediaType);
+	return {
+		renamed: kind !== null && !nameFits(fileName, kind),
+		trueName: kind === null ? fileName : nameForKind(fileName, kind),
+		bindable: kind === 'pdf' && facts.pages !== null && !facts.encrypted && !facts.broken
+	};
+}
+
+const view = <T extends DocumentRow>(row: T): T & FileRemarks => ({ ...row, ...remarksOn(row, row.fileName) });
+
+/** Files a document and attaches it, inside the transaction of the caller. */
+export async function fileDocument(
+	trx: Trx,
+	actor: Actor,
+	file: { readonly sha256: string; readonly fileName: string },
+	details: DocumentDetails
+): Promise<string> {
+	const { subjects, ...about } = details;
+	if (about.supersedes) await documentById(trx, about.supersedes);
+	const id = await insertDocument(trx, { ...about, ...file, personId: actor.personId });
+	await audit(trx, actor, {
+		stream: { kind: 'workspace', id: WORKSPACE_SUBJECT },
+		action: 'document.filed',
+		subject: id,
+		after: { ...about, ...file }
+	});
+	// One order for everybody: two people attaching to the same subjects cannot wait for each other.
+	const ordered = subjects.toSorted((a, b) => (`${a.kind}${a.id}` < `${b.kind}${b.id}` ? -1 : 1));
+	for (const subject of ordered) await attach(trx, actor, id, subject);
+	return id;
+}
+
+async function attach(trx: Trx, actor: Actor, documentId: string, subject: DocumentSubject): Promise<string> {
+	await requireSubject(trx, subject.kind, subject.id);
+	const linkId = await insertLink(trx, documentId, subject, actor.personId);
+	await audit(trx, actor, {
+		stream: { kind: subject.kind, id: subject.id },
+		action: 'document.attached',
+		subject: documentId,
+		after: { linkId, ...subject }
+	});
+	return linkId;
+}
+
+/** Makes a document of a finished upload of one's own. @throws Refused 'wrong-state' while it is not finished. */
+export function createDocument(actor: Actor, uploadId: string, details: DocumentDetails): Promise<string> {
+	requireAct(actor, 'attachDocument');
+	return withActor(actor, async (trx) => {
+		const upload = await uploadById(trx, uploadId);
+		if (upload.state !== 'done' || upload.sha256 === null) throw new Refused('wrong-state', { state: upload.state });
+		return fileDocument(trx, actor, { sha256: upload.sha256, fileName: upload.name }, details);
+	});
+}
+
+export function attachDocument(actor: Actor, documentId: string, subject: DocumentSubject): Promise<string> {
+	requireAct(actor, 'attachDocument');
+	return withActor(actor, async (trx) => {
+		await documentById(trx, documentId);
+		return attach(trx, actor, documentId, subject);
+	});
+}
+
+/** Takes a document off a subject; both stay, and the audit keeps that they belonged together. */
+export function detachDocument(actor: Actor, linkId: string, reason: string | null): Promise<void> {
+	requireAct(actor, 'attachDocument');
+	return withActor(actor, async (trx) => {
+		const link = await lockLink(trx, linkId);
+		await withdrawLink(trx, linkId, new Date());
+		await audit(trx, actor, {
+			stream: { kind: link.subjectKind, id: link.subjectId },
+			action: 'document.detached',
+			subject: link.documentId,
+			before: link,
+			reason
+		});
+	});
+}
+
+export function searchDocuments(actor: Actor, query: ListQuery): Promise<Page<DocumentView>> {
+	return withActor(actor, async (trx) => {
+		const page = await listDocuments(trx, query);
+		return { ...page, rows: page.rows.map(view) };
+	});
+}
+
+export function readDocument(
+	actor: Actor,
+	id: string
+): Promise<{ readonly document: DocumentView; readonly links: readonly LinkRow[] }> {
+	return withActor(actor, async (trx) => ({
+		document: view(await documentById(trx, id)),
+		links: await linksOf(trx, id)
+	}));
+}
+
+export function attachedDocuments(actor: Actor, kind: SubjectKind, id: string) {
+	return withActor(actor, async (trx) => (await documentsOf(trx, kind, id)).map(view));
+}
+
+/** A short-lived address of the file, for an actor who may see the document. @throws Refused 'not-found'. */
+export async function downloadAddress(actor: Actor, id: string, disposition: Disposition): Promise<string> {
+	const document = await withActor(actor, (trx) => documentById(trx, id));
+	const { trueName } = remarksOn(document, document.fileName);
+	const { mediaType, sha256 } = document;
+	return bucket().signedDownload(sha256, { fileName: trueName, mediaType, disposition, seconds: DOWNLOAD_SECONDS });
+}

@@ -84,7 +84,7 @@ async function attach(trx: Trx, actor: Actor, documentId: string, subject: Docum
 }
 
 /** Makes a document of a finished upload of one's own. @throws Refused 'wrong-state' while it is not finished. */
-export function createDocument(actor: Actor, uploadId: string, details: DocumentDetails): Promise<string> {
+export async function createDocument(actor: Actor, uploadId: string, details: DocumentDetails): Promise<string> {
 	requireAct(actor, 'attachDocument');
 	return withActor(actor, async (trx) => {
 		const upload = await uploadById(trx, uploadId);
@@ -93,7 +93,7 @@ export function createDocument(actor: Actor, uploadId: string, details: Document
 	});
 }
 
-export function attachDocument(actor: Actor, documentId: string, subject: DocumentSubject): Promise<string> {
+export async function attachDocument(actor: Actor, documentId: string, subject: DocumentSubject): Promise<string> {
 	requireAct(actor, 'attachDocument');
 	return withActor(actor, async (trx) => {
 		await documentById(trx, documentId);
@@ -102,7 +102,7 @@ export function attachDocument(actor: Actor, documentId: string, subject: Docume
 }
 
 /** Takes a document off a subject; both stay, and the audit keeps that they belonged together. */
-export function detachDocument(actor: Actor, linkId: string, reason: string | null): Promise<void> {
+export async function detachDocument(actor: Actor, linkId: string, reason: string | null): Promise<void> {
 	requireAct(actor, 'attachDocument');
 	return withActor(actor, async (trx) => {
 		const link = await lockLink(trx, linkId);

@@ -25,6 +25,23 @@ function pdf(pages: number, trailerMore = ''): Uint8Array {
 // Encrypted with a password to open (40 bits, revision 2): the hashes stand for one that nobody here knows.
 const LOCKED = `/ID[<00><00>]/Encrypt<</Filter/Standard/V 1/R 2/P -4/O<${'11'.repeat(32)}>/U<${'22'.repeat(32)}>>>`;
 
+// Opens without a password but forbids printing: one empty page, encrypted by qpdf with an owner's password only.
+const RESTRICTED = [
+	'JVBERi0xLjcKJb/3ov4KMSAwIG9iago8PCAvRXh0ZW5zaW9ucyA8PCAvQURCRSA8PCAvQmFzZVZlcnNpb24gLzEuNyAvRXh0ZW5zaW9uTGV2ZW',
+	'wgOCA+PiA+PiAvUGFnZXMgMiAwIFIgL1R5cGUgL0NhdGFsb2cgPj4KZW5kb2JqCjIgMCBvYmoKPDwgL0NvdW50IDEgL0tpZHMgWyAzIDAgUiBd',
+	'IC9UeXBlIC9QYWdlcyA+PgplbmRvYmoKMyAwIG9iago8PCAvTWVkaWFCb3ggWyAwIDAgOSA5IF0gL1BhcmVudCAyIDAgUiAvVHlwZSAvUGFnZS',
+	'A+PgplbmRvYmoKNCAwIG9iago8PCAvQ0YgPDwgL1N0ZENGIDw8IC9BdXRoRXZlbnQgL0RvY09wZW4gL0NGTSAvQUVTVjMgL0xlbmd0aCAzMiA+',
+	'PiA+PiAvRmlsdGVyIC9TdGFuZGFyZCAvTGVuZ3RoIDI1NiAvTyA8Y2E3OTBlOWVjODNhOWExM2I2ZTI5MjdiZDc2OGY4NWQzZjA2ZTIwNzZmOT',
+	'c2YWEzZTM4OTIyNzEyMTE2ODg0Yzc4MDgxNDRmYTZiZDgwYzc5Mzc1YzYxZDFlNzg4Y2FhPiAvT0UgPGU3MTNkNzgwNzI4YTdhMGEwZjkyMWE1',
+	'ZmFkYzBjZTFlMTcwODI4MzNlNDcxNGFhNTQ4YTJhZmE0NDYyMjg2ZTE+IC9QIC0yMDU2IC9QZXJtcyA8NzBhNTM4ZDc2NThhMzAwMzM1ZGY2Yz',
+	'lkOTc2YTdhZjc+IC9SIDYgL1N0bUYgL1N0ZENGIC9TdHJGIC9TdGRDRiAvVSA8YjNlM2RlNTNiZjk4MzQ1OGViZTQ4ZTY5N2EwOGU1NWUxMDVj',
+	'MGVjY2U2NWJjNWFlNDY1MDhlZWYzOWQwMGIwZWM0NTQ4MDY0Njk1YzBmMzFiZWVjMWVlMzU2ZjMzYjkxPiAvVUUgPDM1MWFjMTU4ZWMzNDY4MD',
+	'UyNzA4ZTY1NzU4YTM2MTg4ZTcxYTZmZWQyYzE5ZmVlYzYzZTU1NTZiNTBlNDhlY2E+IC9WIDUgPj4KZW5kb2JqCnhyZWYKMCA1CjAwMDAwMDAw',
+	'MDAgNjU1MzUgZiAKMDAwMDAwMDAxNSAwMDAwMCBuIAowMDAwMDAwMTMwIDAwMDAwIG4gCjAwMDAwMDAxODkgMDAwMDAgbiAKMDAwMDAwMDI1OC',
+	'AwMDAwMCBuIAp0cmFpbGVyIDw8IC9Sb290IDEgMCBSIC9TaXplIDUgL0lEIFs8ZjgwZjJmMGUxY2NhOTQxYzkwYjhlODYwMzAzMWQwNTU+PGY4',
+	'MGYyZjBlMWNjYTk0MWM5MGI4ZTg2MDMwMzFkMDU1Pl0gL0VuY3J5cHQgNCAwIFIgPj4Kc3RhcnR4cmVmCjgwOAolJUVPRgo='
+].join('');
+
 describe('inspectPdf', () => {
 	test.each([1, 12])('counts %i pages', async (pages) => {
 		expect(await inspectPdf(pdfInMemory(pdf(pages)))).toEqual({ pages, encrypted: false, broken: false });
@@ -32,6 +49,11 @@ describe('inspectPdf', () => {
 
 	test('a document that needs a password is encrypted, not broken', async () => {
 		expect(await inspectPdf(pdfInMemory(pdf(2, LOCKED)))).toEqual({ pages: null, encrypted: true, broken: false });
+	});
+
+	test('a document that opens but restricts its use is encrypted too', async () => {
+		const content = Buffer.from(RESTRICTED, 'base64');
+		expect(await inspectPdf(pdfInMemory(content))).toEqual({ pages: 1, encrypted: true, broken: false });
 	});
 
 	test.each([

@@ -1,7 +1,6 @@
-import { jointBounds } from '../material/bounds';
 import { resolveMaterial } from '../material/resolve';
 import type { ResolvedMaterial } from '../material/types';
-import { weakest, type Estimate, type TypicalBasis } from '../quantity/range';
+import type { Estimate } from '../quantity/range';
 import {
 	good,
 	LINE_DECIMALS,
@@ -9,9 +8,9 @@ import {
 	type Id,
 	type LineShare,
 	type Outcome,
-	type PartShare,
 	type Percent
 } from '../quantity/units';
+import { amountOf, extremes } from './amounts';
 import { expand, type Leaf } from './expand';
 import { corners, judgeAmounts, sharesOf, type Shares } from './lines';
 import type {
@@ -126,11 +125,6 @@ function weighMaterial(
 	];
 }
 
-const extremes = (values: readonly bigint[]) => ({
-	low: values.reduce((a, b) => (a < b ? a : b)),
-	high: values.reduce((a, b) => (a > b ? a : b))
-});
-
 function contribute(
 	leaf: Leaf,
 	material: ResolvedMaterial | undefined,
@@ -188,55 +182,4 @@ function rowsOf(
 		share: amountOf(weighed, (part) => part.rowKey === key),
 		contributions: of
 	}));
-}
-
-/**
- * The share of the selected constituents together: typical, and the lowest and highest that can occur, jointly within each
- * material and over the corners of the range lines. Materials vary independently of one another.
- */
-export function amountOf(
-	weighed: readonly WeighedMaterial[],
-	select: (part: WeighedPart) => boolean
-): Estimate<Percent> {
-	const bases: TypicalBasis[] = [];
-	let typical = 0n;
-	let highOpen = false;
-	const perMaterial = weighed.flatMap((material) => {
-		const chosen = material.parts.filter(select);
-		if (chosen.length === 0) return [];
-		for (const part of chosen) {
-			typical += material.typicalWeight * part.share.typical;
-			if (part.share.low !== part.share.high || part.share.basis !== 'derived') bases.push(part.share.basis);
-			highOpen ||= part.share.highOpen;
-		}
-		return [{ corners: material.corners, ...fractionOf(material, select) }];
-	});
-	const count = weighed[0]?.corners.length ?? 0;
-	const at = (corner: number, side: 'low' | 'high') =>
-		perMaterial.reduce((total, material) => total + (material.corners[corner] ?? 0n) * material[side], 0n);
-	const corner = Array.from({ length: count }, (_, index) => index);
-	return {
-		low: extremes([...corner.map((index) => at(index, 'low')), typical]).low as Percent,
-		high: extremes([...corner.map((index) => at(index, 'high')), typical]).high as Percent,
-		highOpen,
-		typical: typical as Percent,
-		basis: weakest(bases)
-	};
-}
-
-/** Lowest and highest share of one material that the selected constituents make up together. */
-function fractionOf(
-	material: WeighedMaterial,
-	select: (part: WeighedPart) => boolean
-): { readonly low: PartShare; readonly high: PartShare } {
-	const inSum = material.parts.filter((part) => part.role !== 'ofWhich');
-	const joint = jointBounds(
-		inSum.map((part) => ({ low: part.share.low, high: part.share.high, chosen: select(part) })),
-		(part) => (part.chosen ? 1n : 0n)
-	) ?? { low: 0n, high: 0n };
-	const inside = material.parts.filter((part) => part.role === 'ofWhich' && select(part));
-	return {
-		low: inside.reduce((total, part) => total + part.share.low, joint.low) as PartShare,
-		high: inside.reduce((total, part) => total + part.share.high, joint.high) as PartShare
-	};
 }

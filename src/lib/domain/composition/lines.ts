@@ -5,7 +5,7 @@ import type { CompositionFault, FormulaLine, FormulaVersionLines } from './types
 export type Shares = ReadonlyMap<Id<'line'>, LineShare>;
 type Ends = ReadonlyMap<Id<'line'>, 'min' | 'max'>;
 
-/** 2¹⁰ corners bound the work; nobody adjusts eleven lines at once. */
+/** 2¹⁰ corners bound the work, over the formula and its bulks together; nobody adjusts eleven lines at once. */
 const MOST_RANGE_LINES = 10;
 
 const isRange = (line: FormulaLine) =>
@@ -37,7 +37,7 @@ export function sharesOf(formulas: readonly FormulaVersionLines[], ends: Ends | 
  * and highest values stand at corners.
  */
 export function corners(formulas: readonly FormulaVersionLines[]): readonly Shares[] {
-	const ranged = formulas.flatMap(({ lines }) => lines.filter(isRange)).slice(0, MOST_RANGE_LINES);
+	const ranged = formulas.flatMap(({ lines }) => lines.filter(isRange));
 	if (ranged.length === 0) return [sharesOf(formulas, null)];
 	return Array.from({ length: 2 ** ranged.length }, (_, corner) => {
 		const ends = new Map(ranged.map((line, bit) => [line.id, (corner >> bit) & 1 ? 'max' : 'min'] as const));
@@ -47,6 +47,11 @@ export function corners(formulas: readonly FormulaVersionLines[]): readonly Shar
 
 /** A formula sums to exactly 100 % after at most one q.s. line, also with every range line at its least and its most. */
 export function judgeAmounts(formulas: readonly FormulaVersionLines[]): CompositionFault[] {
+	const all = formulas.flatMap(({ lines }) => lines.filter(isRange)).length;
+	const [outer] = formulas;
+	if (outer && all > MOST_RANGE_LINES) {
+		return [{ kind: 'tooManyRanges', formula: outer.formula, limit: MOST_RANGE_LINES }];
+	}
 	return formulas.flatMap(({ formula, lines }): CompositionFault[] => {
 		if (lines.length === 0) return [{ kind: 'noLines', formula }];
 		const qs = lines.filter((line) => line.amount.kind === 'qs');
@@ -54,7 +59,6 @@ export function judgeAmounts(formulas: readonly FormulaVersionLines[]): Composit
 		const ranged = lines.filter(isRange);
 		const twisted = ranged.filter(isUpsideDown);
 		if (twisted.length > 0) return twisted.map((line) => ({ kind: 'rangeUpsideDown', formula, line: line.id }));
-		if (ranged.length > MOST_RANGE_LINES) return [{ kind: 'tooManyRanges', formula, limit: MOST_RANGE_LINES }];
 		if (ranged.length > 0 && qs.length === 0) {
 			return ranged.map((line) => ({ kind: 'rangeWithoutQs', formula, line: line.id }));
 		}

@@ -1,4 +1,4 @@
-import { amountOf } from '../composition/compose';
+import { amountOf } from '../composition/amounts';
 import type { Composition, WeighedPart } from '../composition/types';
 import { substanceKey } from '../material/substance-key';
 import type { Estimate } from '../quantity/range';
@@ -18,7 +18,7 @@ export interface AllergenReading {
 }
 
 /** Impurities and processing aids are no source of a named allergen; everything that is there on purpose is. */
-const isSource = (part: WeighedPart) => part.role !== 'impurity' && part.role !== 'processingAid';
+export const isSource = (part: WeighedPart) => part.role !== 'impurity' && part.role !== 'processingAid';
 
 /**
  * Reads every entry against the composition. Above means strictly above the typical sum's threshold (leave-on or rinse-off,
@@ -28,8 +28,9 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 	const scale = 10n ** BigInt(composition.shareDecimals - 16);
 	const present = new Set(composition.rows.map((row) => row.substance));
 	const identities = [...request.substances.values()].filter((identity) => present.has(identity.id));
+	const members = membersOf(identities, request.allergens);
 	return request.allergens.flatMap((entry) => {
-		const substances = new Set(identities.filter((identity) => isMember(identity, entry)).map(({ id }) => id));
+		const substances = members(entry);
 		if (substances.size === 0) return [];
 		const share = amountOf(composition.weighed, (part) => substances.has(part.substance) && isSource(part));
 		if (share.high === 0n) return [];
@@ -47,10 +48,19 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 	});
 }
 
-/** By name first; by CAS number where the supplier used another name. */
-function isMember(identity: SubstanceIdentity, entry: AllergenEntry): boolean {
-	if (substanceKey(entry.labelName) === identity.key) return true;
-	return entry.members.some(
-		(member) => substanceKey(member.inci) === identity.key || member.cas.some((number) => identity.cas.includes(number))
-	);
+/**
+ * By name first; by CAS number only where no entry knows the name, because an oil of the flower and an oil of the peel can share
+ * one number.
+ */
+function membersOf(identities: readonly SubstanceIdentity[], allergens: readonly AllergenEntry[]) {
+	const names = new Set(allergens.flatMap(keysOf));
+	return (entry: AllergenEntry): ReadonlySet<Id<'substance'>> => {
+		const keys = new Set(keysOf(entry));
+		const numbers = new Set(entry.members.flatMap(({ cas }) => cas));
+		const isMember = ({ key, cas }: SubstanceIdentity) =>
+			keys.has(key) || (!names.has(key) && cas.some((number) => numbers.has(number)));
+		return new Set(identities.filter(isMember).map(({ id }) => id));
+	};
 }
+
+const keysOf = (entry: AllergenEntry) => [entry.labelName, ...entry.members.map(({ inci }) => inci)].map(substanceKey);

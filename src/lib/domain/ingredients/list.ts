@@ -1,10 +1,11 @@
-import { amountOf } from '../composition/compose';
-import type { Composition, CompositionRow, WeighedPart } from '../composition/types';
+import { amountOf } from '../composition/amounts';
+import type { Composition, CompositionRow, Contribution, WeighedPart } from '../composition/types';
 import type { Estimate } from '../quantity/range';
 import { compare, type Id, type Percent } from '../quantity/units';
-import { readAllergens, type AllergenReading } from './allergens';
+import { isSource, readAllergens, type AllergenReading } from './allergens';
 import { compareColourants, compareNames, euName } from './names';
-import { weakPairs, widest } from './strength';
+import { weakPairs } from './strength';
+import { widest } from './turning';
 import type {
 	Block,
 	IngredientList,
@@ -82,28 +83,42 @@ function candidatesOf(
 		const name = nameOf(row);
 		groups.set(name, [...(groups.get(name) ?? []), row]);
 	}
+	const isSelected = (row: CompositionRow, select: Candidate['select']) =>
+		row.contributions.some((contribution) => select(weighedAs(row, contribution)));
 	const direct = [...groups].map(([name, rows]): Candidate => {
 		const keys = new Set(rows.map((row) => row.key));
 		const allergen = named.find(({ entry }) => entry.labelName === name) ?? null;
-		const select = allergen
-			? (part: WeighedPart) =>
-					part.role !== 'impurity' &&
-					part.role !== 'processingAid' &&
-					(keys.has(part.rowKey) || allergen.substances.has(part.substance))
-			: (part: WeighedPart) => keys.has(part.rowKey) && isListed(part);
-		const colourant = rows.every((row) => row.use === 'colourant');
-		return { name, rows, select, colourant, allergen, share: amountOf(composition.weighed, select) };
+		const select = (part: WeighedPart) =>
+			allergen
+				? isSource(part) && (keys.has(part.rowKey) || allergen.substances.has(part.substance))
+				: keys.has(part.rowKey) && isListed(part);
+		return {
+			name,
+			rows: allergen ? composition.rows.filter((row) => isSelected(row, select)) : rows,
+			select,
+			colourant: rows.every((row) => row.use === 'colourant'),
+			allergen,
+			share: amountOf(composition.weighed, select)
+		};
 	});
 	const inside = named
 		.filter(({ entry }) => !groups.has(entry.labelName))
 		.map((reading): Candidate => {
-			const rows = composition.rows.filter((row) => reading.substances.has(row.substance));
-			const select = (part: WeighedPart) =>
-				reading.substances.has(part.substance) && part.role !== 'impurity' && part.role !== 'processingAid';
+			const select = (part: WeighedPart) => isSource(part) && reading.substances.has(part.substance);
+			const rows = composition.rows.filter((row) => isSelected(row, select));
 			return { name: reading.entry.labelName, rows, select, colourant: false, allergen: reading, share: reading.share };
 		});
 	return [...direct, ...inside];
 }
+
+const weighedAs = (row: CompositionRow, { constituent, role, part }: Contribution): WeighedPart => ({
+	rowKey: row.key,
+	constituent,
+	substance: row.substance,
+	role,
+	parent: null,
+	share: part
+});
 
 const blockOf = (candidate: Candidate, onePercent: bigint): Block => {
 	if (candidate.colourant) return 'colourant';
@@ -138,19 +153,10 @@ function entryOf(candidate: Candidate, block: Block): ListEntry {
 	};
 }
 
-const contributionsOf = (candidate: Candidate): Reason[] =>
-	candidate.rows.flatMap((row) =>
+const contributionsOf = ({ rows, select }: Candidate): Reason[] =>
+	rows.flatMap((row) =>
 		row.contributions
-			.filter((contribution) =>
-				candidate.select({
-					rowKey: row.key,
-					constituent: contribution.constituent,
-					substance: row.substance,
-					role: contribution.role,
-					parent: null,
-					share: contribution.part
-				})
-			)
+			.filter((contribution) => select(weighedAs(row, contribution)))
 			.map((of) => ({ kind: 'contribution', of }) as const)
 	);
 
@@ -208,5 +214,5 @@ const questionsOf = (composition: Composition, allergens: readonly AllergenReadi
 			limit,
 			ruleId: entry.ruleId,
 			printed: above,
-			ask: widest(composition, (part) => substances.has(part.substance))?.material.material ?? null
+			ask: widest(composition, (part) => substances.has(part.substance))
 		}));

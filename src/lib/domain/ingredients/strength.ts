@@ -1,20 +1,14 @@
 import type { Composition, WeighedMaterial, WeighedPart } from '../composition/types';
 import type { Estimate } from '../quantity/range';
-import { ratio } from '../quantity/ratio';
-import { WHOLE_PART, type Percent, type Ratio } from '../quantity/units';
+import { least, most, WHOLE_PART, type Percent } from '../quantity/units';
 import { hull, minkowski, reachesAbove, type Point } from './polygon';
-import type { WeakPair } from './types';
-
-export interface PlacedName {
-	readonly name: string;
-	readonly share: Estimate<Percent>;
-	readonly select: (part: WeighedPart) => boolean;
-}
+import { describe } from './turning';
+import type { PlacedName, WeakPair } from './types';
 
 /**
  * Every pair i printed before j for which some composition within the suppliers' ranges has x_j > x_i with x_j in the ordered
- * group (at or above `orderedFrom`): not only neighbours. Exact where no formula line is a range; with range lines the pairs
- * that can occur are enclosed by the hull over the corners, so that a weak pair is never missed.
+ * group (at or above `orderedFrom`): not only neighbours. Exact for what stands in the sum of its material; range lines and
+ * parts of parts that several names share are enclosed by a hull, so that a weak pair is never missed.
  */
 export function weakPairs(
 	composition: Composition,
@@ -24,11 +18,15 @@ export function weakPairs(
 	return placed.flatMap((before, at) =>
 		placed
 			.slice(at + 1)
-			.filter((after) => after.share.high >= orderedFrom && after.share.high > before.share.low)
+			.filter(({ share }) => canBeOrdered(share, orderedFrom) && share.high > before.share.low)
 			.filter((after) => canTurn(composition, before, after, orderedFrom))
-			.map((after) => describe(composition, before, after))
+			.map((after) => describe(composition, before, after, orderedFrom))
 	);
 }
+
+/** "< 1 %" stays below 1 %: an open bound that only just reaches the group never enters it. */
+const canBeOrdered = (share: Estimate<Percent>, orderedFrom: bigint) =>
+	share.high > orderedFrom || (share.high === orderedFrom && !share.highOpen);
 
 function canTurn(composition: Composition, before: PlacedName, after: PlacedName, orderedFrom: bigint): boolean {
 	const corners = composition.weighed[0]?.corners.length ?? 0;
@@ -53,12 +51,57 @@ function shapeOf(material: WeighedMaterial, before: PlacedName, after: PlacedNam
 	const theirs = span(inSum.filter((part) => after.select(part) && !before.select(part)));
 	const rest = span(inSum.filter((part) => !before.select(part) && !after.select(part)));
 	const box = boxAndStrip(mine, theirs, { low: WHOLE_PART - rest.high, high: WHOLE_PART - rest.low });
-	const inside = material.parts.filter((part) => part.role === 'ofWhich');
-	// A part of the name before never outweighs it: counted with its parent, it only adds to both.
-	const own = new Set(inSum.filter(before.select).map((part) => part.constituent));
-	const free = inside.filter((part) => part.parent === null || !own.has(part.parent));
-	return minkowski(box, segment(span(free.filter(before.select)), span(free.filter(after.select))));
+	return inSum.reduce<readonly Point[]>((shape, parent) => {
+		const children = material.parts.filter((part) => part.parent === parent.constituent);
+		if (children.length === 0) return shape;
+		if (before.select(parent)) return lifted(shape, parent, children, mine, after);
+		return minkowski(shape, family(parent, children, before, after));
+	}, box);
 }
+
+/** Parts of a parent that is not the name before: in their ranges, and together within the parent. */
+function family(
+	parent: WeighedPart,
+	children: readonly WeighedPart[],
+	before: PlacedName,
+	after: PlacedName
+): readonly Point[] {
+	const mine = children.filter(before.select);
+	const theirs = after.select(parent) ? [] : children.filter((part) => after.select(part) && !before.select(part));
+	const others = span(children.filter((part) => !mine.includes(part) && !theirs.includes(part)));
+	return boxAndStrip(span(mine), span(theirs), { low: 0n, high: parent.share.high - others.low });
+}
+
+/** The name after as a part of the name before: never more than its parent holds. */
+function lifted(
+	shape: readonly Point[],
+	parent: WeighedPart,
+	children: readonly WeighedPart[],
+	mine: Span,
+	after: PlacedName
+): readonly Point[] {
+	if (after.select(parent)) return shape;
+	const theirs = span(children.filter(after.select));
+	const others = span(children.filter((part) => !after.select(part)));
+	// x is the parent alone, or holds more beside it; then the parent is enclosed by its own highest.
+	const alone = mine.low === parent.share.low && mine.high === parent.share.high;
+	const room = (x: bigint) => least(theirs.high, (alone ? x : parent.share.high) - others.low);
+	const bend = theirs.high + others.low;
+	return hull(
+		[...shape, ...pointsAt(shape, bend)].flatMap(({ x, y }) => [
+			{ x, y: y + theirs.low },
+			{ x, y: y + most(theirs.low, room(x)) }
+		])
+	);
+}
+
+/** Where the outline crosses a given x; whole, as every side is level, upright or falls one for one. */
+const pointsAt = (shape: readonly Point[], x: bigint): readonly Point[] =>
+	shape.flatMap((from, at) => {
+		const to = shape[(at + 1) % shape.length];
+		if (!to || from.x < x === to.x < x || to.x === from.x) return [];
+		return [{ x, y: from.y + ((to.y - from.y) * (x - from.x)) / (to.x - from.x) }];
+	});
 
 interface Span {
 	readonly low: bigint;
@@ -69,14 +112,6 @@ const span = (parts: readonly WeighedPart[]): Span =>
 		low: 0n,
 		high: 0n
 	});
-
-const segment = (x: Span, y: Span): readonly Point[] =>
-	hull([
-		{ x: x.low, y: y.low },
-		{ x: x.low, y: y.high },
-		{ x: x.high, y: y.low },
-		{ x: x.high, y: y.high }
-	]);
 
 /** Corners of {x in its span, y in its span, x + y within the strip}. */
 function boxAndStrip(x: Span, y: Span, strip: Span): readonly Point[] {
@@ -90,54 +125,4 @@ function boxAndStrip(x: Span, y: Span, strip: Span): readonly Point[] {
 		{ x: total - y.high, y: y.high }
 	]);
 	return hull([...corners, ...onStrip].filter(within));
-}
-
-interface WidestPart {
-	readonly material: WeighedMaterial;
-	readonly part: WeighedPart;
-	readonly width: bigint;
-}
-
-/** The selected constituent whose range moves the formula most: weight × width. */
-export function widest(composition: Composition, select: (part: WeighedPart) => boolean): WidestPart | null {
-	let found: WidestPart | null = null;
-	for (const material of composition.weighed) {
-		for (const part of material.parts.filter(select)) {
-			const width = material.typicalWeight * (part.share.high - part.share.low);
-			if (width > (found?.width ?? 0n)) found = { material, part, width };
-		}
-	}
-	return found;
-}
-
-function describe(composition: Composition, before: PlacedName, after: PlacedName): WeakPair {
-	const settling = widest(composition, (part) => before.select(part) || after.select(part));
-	const derived = before.share.basis === 'derived' || after.share.basis === 'derived';
-	const equal = before.share.typical === after.share.typical;
-	const at = settling && turningPoint(settling, before, after);
-	return {
-		before: before.name,
-		after: after.name,
-		strength: derived || equal ? 'undecided' : 'restsOnTypical',
-		turnsAt:
-			settling && at
-				? {
-						material: settling.material.material,
-						constituent: settling.part.constituent,
-						substance: settling.part.substance,
-						at
-					}
-				: null,
-		ask: settling?.material.material ?? null
-	};
-}
-
-/** The constituent's share of its material at which the two weigh the same, all else at its typical; null outside its range. */
-function turningPoint({ material, part }: WidestPart, before: PlacedName, after: PlacedName): Ratio | null {
-	if (material.typicalWeight === 0n) return null;
-	const gap = before.share.typical - after.share.typical;
-	const direction = after.select(part) ? 1n : -1n;
-	const at = ratio(part.share.typical * material.typicalWeight + direction * gap, material.typicalWeight);
-	const inside = at.num >= part.share.low * at.den && at.num <= part.share.high * at.den;
-	return inside ? at : null;
 }

@@ -1,4 +1,4 @@
-import type { Contribution, CompositionRow } from '../composition/types';
+import type { Contribution, CompositionRow, WeighedPart } from '../composition/types';
 import type { Estimate } from '../quantity/range';
 import type { Id, IsoDate, Percent, Ratio } from '../quantity/units';
 
@@ -60,6 +60,12 @@ export interface ListEntry {
 	readonly why: readonly Reason[];
 }
 
+/** A printed name with the constituents that it stands for; what order strength compares. */
+export interface PlacedName {
+	readonly name: string;
+	readonly share: Estimate<Percent>;
+	readonly select: (part: WeighedPart) => boolean;
+}
 export type Strength = 'restsOnTypical' | 'undecided';
 /** A pair printed before/after that some composition within the suppliers' ranges would print the other way round. */
 export interface WeakPair {

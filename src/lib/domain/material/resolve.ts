@@ -1,24 +1,19 @@
-import { type Estimate, type Range, type TypicalBasis } from '../quantity/range';
-import { faulty, good, least, most, sum, WHOLE_PART, type Id, type Outcome, type PartShare } from '../quantity/units';
+import type { Range, TypicalBasis } from '../quantity/range';
+import { faulty, good, most, sum, WHOLE_PART, type Id, type Outcome, type PartShare } from '../quantity/units';
 import { tighten } from './bounds';
+import { partsOf, resolveParts } from './parts';
 import { largestRemainder } from './remainder';
+import { estimate, NOTHING, stated, type Stated } from './stated';
 import type { Constituent, MaterialFault, MaterialVersion, ResolvedMaterial, ResolvedPart } from './types';
 
 /** Typicals may miss 100 % by at most 0.5 %: house rule, common practice, no source. */
 const TOLERANCE = (WHOLE_PART / 200n) as PartShare;
-const NOTHING = 0n as PartShare;
-
-interface Stated {
-	readonly of: Constituent;
-	readonly low: PartShare;
-	readonly high: PartShare;
-	readonly typical: PartShare | null;
-	readonly single: boolean;
-}
 
 /**
  * What a material may consist of, once the sum has narrowed the supplier's ranges; shares in 10⁻⁸ % of the material.
  * One figure is no range; a maximum alone starts at 0; no figure at all ("balance") lies between 0 and 100.
+ * Two rows of one substance stay two rows (their roles and sources may differ); whoever adds them takes both, jointly bounded,
+ * which gives the same figures as merging them first.
  * Faults say by how much a declaration contradicts itself; nothing is scaled silently (typicals within 0.5 are, and say so).
  */
 export function resolveMaterial(version: MaterialVersion): Outcome<ResolvedMaterial, MaterialFault> {
@@ -28,19 +23,22 @@ export function resolveMaterial(version: MaterialVersion): Outcome<ResolvedMater
 	if (upsideDown.length > 0) {
 		return { ok: false, faults: upsideDown.map(({ id }) => ({ kind: 'rangeUpsideDown', at: id })) };
 	}
-	const orphan = version.constituents.find((part) => part.place === 'ofWhich' && !has(version, part.parent));
+	const astray = version.constituents.flatMap(typicalAstray);
+	if (astray.length > 0) return { ok: false, faults: astray };
+	const orphan = version.constituents.find((part) => part.place === 'ofWhich' && !holds(inSum, part.parent));
 	if (orphan) return faulty<MaterialFault>({ kind: 'parentUnknown', at: orphan.id });
 
 	const raised = raiseParents(inSum.map(stated), version);
 	if (!raised.ok) return raised;
 	const solved = raised.value.every((part) => part.single) ? solveSingles(raised.value) : solveRanges(raised.value);
 	if (!solved.ok) return solved;
-	const children = resolveChildren(version, solved.value);
+	const children = resolveParts(version, solved.value);
 	if (!children.ok) return children;
 	return good({ version: version.id, material: version.material, parts: [...solved.value, ...children.value] });
 }
 
-const has = (version: MaterialVersion, id: Id<'constituent'>) => version.constituents.some((part) => part.id === id);
+/** Only what stands in the sum can hold parts: a part of a part has no share of its own to be measured against. */
+const holds = (inSum: readonly Constituent[], id: Id<'constituent'>) => inSum.some((part) => part.id === id);
 
 function isUpsideDown({ declared }: Constituent): boolean {
 	const low = declared.low ?? NOTHING;
@@ -48,24 +46,20 @@ function isUpsideDown({ declared }: Constituent): boolean {
 	return low > high;
 }
 
-function stated(of: Constituent): Stated {
-	const { low, typical, high } = of.declared;
-	if (low === null && high === null && typical !== null) {
-		return { of, low: typical, high: typical, typical, single: true };
-	}
-	const range = { low: low ?? NOTHING, high: high ?? WHOLE_PART };
-	const single = range.low === range.high;
-	return { of, ...range, typical: typical ?? (single ? range.low : null), single };
+/** A typical outside the very range that it was declared with. */
+function typicalAstray({ id, declared }: Constituent): MaterialFault[] {
+	const { typical } = declared;
+	const low = declared.low ?? NOTHING;
+	const high = declared.high ?? WHOLE_PART;
+	if (typical === null || (typical >= low && typical <= high)) return [];
+	return [{ kind: 'typicalOutsideRange', at: id, range: { low, high, highOpen: declared.highOpen } }];
 }
-
-const childrenOf = (version: MaterialVersion, parent: Id<'constituent'>) =>
-	version.constituents.filter((part) => part.place === 'ofWhich' && part.parent === parent).map(stated);
 
 /** A parent holds at least what its parts are said to hold at least. */
 function raiseParents(parts: readonly Stated[], version: MaterialVersion): Outcome<readonly Stated[], MaterialFault> {
 	const faults: MaterialFault[] = [];
 	const raised = parts.map((part) => {
-		const least = sum(childrenOf(version, part.of.id).map((child) => child.low));
+		const least = sum(partsOf(version, part.of.id).map((child) => child.low));
 		if (least > part.high) {
 			faults.push({ kind: 'partsAboveParent', parent: part.of.id, by: (least - part.high) as PartShare });
 		}
@@ -87,24 +81,13 @@ function solveSingles(parts: readonly Stated[]): Outcome<readonly ResolvedPart[]
 		total,
 		WHOLE_PART
 	);
-	return good(parts.map((part, at) => resolved(part, exactRange(values[at] ?? 0n), values[at] ?? 0n, basis)));
+	return good(parts.map((part, at) => estimate(part, exactRange(values[at] ?? 0n), values[at] ?? 0n, basis)));
 }
 
 const exactRange = (value: bigint): Range<PartShare> => ({
 	low: value as PartShare,
 	high: value as PartShare,
 	highOpen: false
-});
-
-const resolved = (part: Stated, range: Range<PartShare>, typical: bigint, basis: TypicalBasis): ResolvedPart => ({
-	of: part.of,
-	share: {
-		low: range.low,
-		high: range.high,
-		highOpen: part.of.declared.highOpen && range.high === part.high,
-		typical: typical as PartShare,
-		basis
-	}
 });
 
 function solveRanges(parts: readonly Stated[]): Outcome<readonly ResolvedPart[], MaterialFault> {
@@ -127,9 +110,9 @@ function solveRanges(parts: readonly Stated[]): Outcome<readonly ResolvedPart[],
 	if (!typicals.ok) return typicals;
 	return good(
 		parts.map((part, at) => {
-			const range = ranges[at] ?? part;
+			const range = ranges[at] ?? exactRange(part.low);
 			const typical = typicals.value[at] ?? { value: range.low, basis: 'derived' as const };
-			return resolved(part, { ...range, highOpen: false }, typical.value, typical.basis);
+			return estimate(part, range, typical.value, typical.basis);
 		})
 	);
 }
@@ -194,35 +177,5 @@ function normalise(
 			const move = missing > 0n ? (moves[at] ?? 0n) : -(moves[at] ?? 0n);
 			return { value: (part.typical ?? 0n) + move, basis: 'normalised' };
 		})
-	);
-}
-
-/** Parts of a part: each at most its parent, together at most their parent; a missing typical is the middle, marked derived. */
-function resolveChildren(
-	version: MaterialVersion,
-	parents: readonly ResolvedPart[]
-): Outcome<readonly ResolvedPart[], MaterialFault> {
-	const faults: MaterialFault[] = [];
-	const children = parents.flatMap((parent) => {
-		const parts = childrenOf(version, parent.of.id);
-		const least = sum(parts.map((part) => part.low));
-		if (least > parent.share.high) {
-			faults.push({ kind: 'partsAboveParent', parent: parent.of.id, by: (least - parent.share.high) as PartShare });
-		}
-		return parts.map((part) => resolveChild(part, parent.share, (least - part.low) as PartShare));
-	});
-	return faults.length > 0 ? { ok: false, faults } : good(children);
-}
-
-function resolveChild(part: Stated, parent: Estimate<PartShare>, siblings: PartShare): ResolvedPart {
-	const room = most(NOTHING, (parent.high - siblings) as PartShare);
-	const high = least(part.high, most(part.low, room));
-	const middle = (part.low + high) / 2n;
-	const declared = part.typical !== null && part.typical <= high;
-	return resolved(
-		part,
-		{ low: part.low, high, highOpen: false },
-		declared ? (part.typical ?? middle) : middle,
-		declared ? 'declared' : 'derived'
 	);
 }

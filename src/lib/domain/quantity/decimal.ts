@@ -67,12 +67,13 @@ export function formatFixed(value: bigint, decimals: number, places: number, dir
 		return places === 0 ? (whole ?? '0') : `${whole}.${fraction.padEnd(places, '0')}`;
 	}
 	const step = tenTo(decimals - places);
-	const kept = roundTo(value, step, direction);
+	const kept = divide(value, step, direction);
 	const [whole, fraction = ''] = formatExact(kept, places).split('.');
 	return places === 0 ? (whole ?? '0') : `${whole}.${fraction.padEnd(places, '0')}`;
 }
 
-function roundTo(value: bigint, step: bigint, direction: Direction): bigint {
+/** value ÷ step as a whole number, rounded in the stated direction; a half goes up. */
+export function divide(value: bigint, step: bigint, direction: Direction): bigint {
 	const quotient = value / step;
 	const rest = value % step;
 	if (rest === 0n) return quotient;

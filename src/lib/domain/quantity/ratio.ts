@@ -1,4 +1,4 @@
-import { formatExact, formatFixed, type Direction } from './decimal';
+import { divide, formatExact, formatFixed, type Direction } from './decimal';
 import { compare, type Ratio } from './units';
 
 const gcd = (a: bigint, b: bigint): bigint => (b === 0n ? a : gcd(b, a % b));
@@ -14,9 +14,13 @@ export function ratio(num: bigint, den: bigint): Ratio {
 
 export const compareRatios = (a: Ratio, b: Ratio): number => compare(a.num * b.den, b.num * a.den);
 
-/** As a decimal with `decimals` of scale: exact where it ends within `places`, else cut in the stated direction. */
+/**
+ * As a decimal, the value being in 10^-decimals: exact where it ends within `decimals + places`, else rounded to `places`
+ * decimals in the stated direction.
+ */
 export function formatRatio(value: Ratio, decimals: number, places: number, direction: Direction): string {
 	const scaled = value.num * 10n ** BigInt(places);
 	if (scaled % value.den === 0n) return formatExact(scaled / value.den, places + decimals);
-	return formatFixed((scaled * 10n) / value.den, places + decimals + 1, places, direction);
+	const step = value.den * 10n ** BigInt(decimals);
+	return formatFixed(divide(scaled, step, direction), places, places, direction);
 }

@@ -1,0 +1,89 @@
+import type { Composition, WeighedMaterial, WeighedPart } from '../composition/types';
+import { ratio } from '../quantity/ratio';
+import { compare, most, type Ratio } from '../quantity/units';
+import type { PlacedName, WeakPair } from './types';
+
+interface RangedPart {
+	readonly material: WeighedMaterial;
+	readonly part: WeighedPart;
+	readonly width: bigint;
+}
+
+/** The selected constituents that a supplier left open, by how far each moves the formula: weight × width, widest first. */
+const ranged = (composition: Composition, select: (part: WeighedPart) => boolean): readonly RangedPart[] =>
+	composition.weighed
+		.flatMap((material) =>
+			material.parts
+				.filter(select)
+				.map((part) => ({ material, part, width: material.typicalWeight * (part.share.high - part.share.low) }))
+		)
+		.filter(({ width }) => width > 0n)
+		.sort((a, b) => compare(b.width, a.width));
+
+/** The material whose narrower range would settle most of the selected amount. */
+export const widest = (composition: Composition, select: (part: WeighedPart) => boolean) =>
+	ranged(composition, select)[0]?.material.material ?? null;
+
+/**
+ * How firmly a weak pair stands, the supplier's figure at which it turns, and the material to ask about: the widest range at
+ * which it turns, all else at its typical; the widest range where no single one turns it.
+ */
+export function describe(
+	composition: Composition,
+	before: PlacedName,
+	after: PlacedName,
+	orderedFrom: bigint
+): WeakPair {
+	const candidates = ranged(composition, (part) => before.select(part) || after.select(part));
+	const turns = candidates.flatMap((candidate) => {
+		const at = turningPoint(candidate, before, after, orderedFrom);
+		return at ? [{ candidate, at }] : [];
+	});
+	const [turn] = turns;
+	const derived = before.share.basis === 'derived' || after.share.basis === 'derived';
+	const equal = before.share.typical === after.share.typical;
+	return {
+		before: before.name,
+		after: after.name,
+		strength: derived || equal ? 'undecided' : 'restsOnTypical',
+		turnsAt: turn
+			? {
+					material: turn.candidate.material.material,
+					constituent: turn.candidate.part.constituent,
+					substance: turn.candidate.part.substance,
+					at: turn.at
+				}
+			: null,
+		ask: (turn?.candidate ?? candidates[0])?.material.material ?? null
+	};
+}
+
+/**
+ * The constituent's share of its material (in 10⁻⁸ %) at which the two weigh the same and the second is in the ordered group;
+ * null outside its range. Where only the other name can make room in the material, what the one gains the other loses.
+ */
+function turningPoint(
+	{ material, part }: RangedPart,
+	before: PlacedName,
+	after: PlacedName,
+	orderedFrom: bigint
+): Ratio | null {
+	const weight = material.typicalWeight;
+	const rises = after.select(part);
+	const exchange = isExchange(material, part, rises ? before : after);
+	const gap = before.share.typical - after.share.typical;
+	const missing = orderedFrom - after.share.typical;
+	if (!rises && !exchange && missing > 0n) return null;
+	const twice = exchange ? most(gap, missing * 2n) : most(gap, rises ? missing : gap) * 2n;
+	const at = ratio(part.share.typical * weight * 2n + (rises ? twice : -twice), weight * 2n);
+	const inside = at.num >= part.share.low * at.den && at.num <= part.share.high * at.den;
+	return inside ? at : null;
+}
+
+function isExchange(material: WeighedMaterial, part: WeighedPart, other: PlacedName): boolean {
+	if (part.role === 'ofWhich') return false;
+	const rest = material.parts.filter(
+		(each) => each !== part && each.role !== 'ofWhich' && each.share.low < each.share.high
+	);
+	return rest.length > 0 && rest.every(other.select);
+}

@@ -1,6 +1,7 @@
 import { amountOf } from '../composition/amounts';
 import type { Composition, WeighedPart } from '../composition/types';
 import { substanceKey } from '../material/substance-key';
+import { isBefore } from '../quantity/day';
 import type { Estimate } from '../quantity/range';
 import type { Id, Percent } from '../quantity/units';
 import type { AllergenEntry, ListRequest, SubstanceIdentity } from './types';
@@ -41,7 +42,7 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 				substances,
 				share,
 				limit,
-				inForce: entry.placedFrom === null || request.batchDay >= entry.placedFrom,
+				inForce: entry.placedFrom === null || !isBefore(request.batchDay, entry.placedFrom),
 				above: share.typical > limit
 			}
 		];

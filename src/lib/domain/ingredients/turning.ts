@@ -1,5 +1,5 @@
 import type { Composition, WeighedMaterial, WeighedPart } from '../composition/types';
-import { ratio } from '../quantity/ratio';
+import { compareRatios, ratio } from '../quantity/ratio';
 import { compare, most, type Ratio } from '../quantity/units';
 import type { PlacedName, WeakPair } from './types';
 
@@ -76,8 +76,8 @@ function turningPoint(
 	if (!rises && !exchange && missing > 0n) return null;
 	const twice = exchange ? most(gap, missing * 2n) : most(gap, rises ? missing : gap) * 2n;
 	const at = ratio(part.share.typical * weight * 2n + (rises ? twice : -twice), weight * 2n);
-	const inside = at.num >= part.share.low * at.den && at.num <= part.share.high * at.den;
-	return inside ? at : null;
+	const outside = compareRatios(at, ratio(part.share.low, 1n)) < 0 || compareRatios(at, ratio(part.share.high, 1n)) > 0;
+	return outside ? null : at;
 }
 
 function isExchange(material: WeighedMaterial, part: WeighedPart, other: PlacedName): boolean {

@@ -14,12 +14,3 @@ export interface Estimate<Q extends bigint> extends Range<Q> {
 const ORDER: readonly TypicalBasis[] = ['declared', 'normalised', 'derived'];
 export const weakest = (bases: readonly TypicalBasis[]): TypicalBasis =>
 	ORDER[Math.max(0, ...bases.map((basis) => ORDER.indexOf(basis)))] ?? 'declared';
-
-export const exactly = <Q extends bigint>(value: Q, basis: TypicalBasis = 'declared'): Estimate<Q> => ({
-	low: value,
-	typical: value,
-	high: value,
-	highOpen: false,
-	basis
-});
-export const isExact = (range: Range<bigint>) => range.low === range.high;

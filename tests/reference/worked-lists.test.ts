@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { formatRatio } from '../../src/lib/domain/quantity/ratio';
-import { listOf, namesIn, shareOf, type Formulas, type Materials } from './support/formula';
+import type { Formulas, Materials } from '../../src/lib/domain/testing/formula';
+import { listOf, namesIn, shareOf } from './support/list';
 
 // Source of every expected list: the fact base, B.6 "Worked ingredient lists" (original formulas, arithmetic checked by script),
 // after Regulation (EC) No 1223/2009, Art. 19(1)(g) and Annex III as amended by (EU) 2023/1545.
@@ -25,9 +26,13 @@ describe('formula 1: day cream, leave-on', () => {
 		citric: parts(['Citric Acid', '50'], ['Aqua', '50']),
 		perfume: [
 			{ inci: 'Parfum', typical: '100' },
-			...parts(['Linalool', '12'], ['Limonene', '8'], ['Citronellol', '1.5'], ['Coumarin', '0.3'], ['Geraniol', '0.2']).map(
-				(each) => ({ ...each, ofWhich: 'Parfum' })
-			)
+			...parts(
+				['Linalool', '12'],
+				['Limonene', '8'],
+				['Citronellol', '1.5'],
+				['Coumarin', '0.3'],
+				['Geraniol', '0.2']
+			).map((each) => ({ ...each, ofWhich: 'Parfum' }))
 		]
 	};
 	const list = listOf(

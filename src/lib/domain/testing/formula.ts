@@ -1,20 +1,20 @@
-import { compose } from '../../../src/lib/domain/composition/compose';
-import type { Composition, CompositionRequest, FormulaLine } from '../../../src/lib/domain/composition/types';
-import { ingredientList } from '../../../src/lib/domain/ingredients/list';
-import { colourIndexIn } from '../../../src/lib/domain/ingredients/names';
-import type { IngredientList, Stay, SubstanceIdentity } from '../../../src/lib/domain/ingredients/types';
-import { substanceKey } from '../../../src/lib/domain/material/substance-key';
-import type { Constituent, MaterialVersion, PartRole, Use } from '../../../src/lib/domain/material/types';
-import { decimalOf, formatExact } from '../../../src/lib/domain/quantity/decimal';
-import type { Id, IsoDate, LineShare, PartShare } from '../../../src/lib/domain/quantity/units';
-import { EU_ALLERGENS } from '../../../src/lib/reference';
+import { compose } from '../composition/compose';
+import type { Composition, CompositionRequest, FormulaLine } from '../composition/types';
+import { colourIndexIn } from '../ingredients/names';
+import type { SubstanceIdentity } from '../ingredients/types';
+import { substanceKey } from '../material/substance-key';
+import type { Constituent, MaterialVersion, PartRole, Use } from '../material/types';
+import { decimalOf } from '../quantity/decimal';
+import type { Id, LineShare, PartShare } from '../quantity/units';
 
-/** "Glycerin 99.5", "Glycerin 50-60", "Aqua balance", "Titanium Dioxide nano 40", "of Parfum: Linalool 12". */
+/** One constituent as a test writes it; `ofWhich` names the constituent that holds it. */
 export interface Part {
 	readonly inci: string;
 	readonly min?: string;
 	readonly typical?: string;
 	readonly max?: string;
+	/** The maximum is "less than". */
+	readonly open?: boolean;
 	readonly nano?: boolean;
 	readonly use?: Use;
 	readonly role?: PartRole;
@@ -45,7 +45,12 @@ export function materialOf(name: string, parts: readonly Part[]): MaterialVersio
 			const common = {
 				id: id(index),
 				substance: substanceKey(each.inci) as Id<'substance'>,
-				declared: { low: part(each.min), typical: part(each.typical), high: part(each.max), highOpen: false },
+				declared: {
+					low: part(each.min),
+					typical: part(each.typical),
+					high: part(each.max),
+					highOpen: each.open ?? false
+				},
 				nano: each.nano ?? false,
 				use: each.use ?? 'other',
 				source: null
@@ -95,7 +100,8 @@ function lineOf(formula: string, each: Line, index: number): FormulaLine {
 
 export function composed(materials: Materials, formulas: Formulas, formula = 'F'): Composition {
 	const outcome = compose(requestOf(materials, formulas, formula));
-	if (!outcome.ok) throw new Error(`faults: ${JSON.stringify(outcome.faults, (_k, v) => (typeof v === 'bigint' ? `${v}` : v))}`);
+	if (!outcome.ok)
+		throw new Error(`faults: ${JSON.stringify(outcome.faults, (_k, v) => (typeof v === 'bigint' ? `${v}` : v))}`);
 	return outcome.value;
 }
 
@@ -109,25 +115,3 @@ export function substancesOf(materials: Materials): ReadonlyMap<Id<'substance'>,
 	}
 	return found;
 }
-
-export const listOf = (
-	materials: Materials,
-	formulas: Formulas,
-	{ stay = 'leave-on', day = '2026-12-01', formula = 'F' }: { stay?: Stay; day?: string; formula?: string } = {}
-): IngredientList =>
-	ingredientList(composed(materials, formulas, formula), {
-		market: 'EU',
-		stay,
-		batchDay: day as IsoDate,
-		substances: substancesOf(materials),
-		allergens: EU_ALLERGENS
-	});
-
-/** The typical share of a name in %, exact. */
-export function shareOf(list: IngredientList, name: string): string | undefined {
-	const entry = list.entries.find((each) => each.name === name);
-	return entry && formatExact(entry.share.typical, list.shareDecimals);
-}
-
-export const namesIn = (list: IngredientList, ...blocks: string[]) =>
-	list.entries.filter((entry) => blocks.includes(entry.block)).map((entry) => entry.name);

@@ -1,0 +1,28 @@
+import { ingredientList } from '../../../src/lib/domain/ingredients/list';
+import type { IngredientList, Stay } from '../../../src/lib/domain/ingredients/types';
+import { formatExact } from '../../../src/lib/domain/quantity/decimal';
+import type { IsoDate } from '../../../src/lib/domain/quantity/units';
+import { composed, substancesOf, type Formulas, type Materials } from '../../../src/lib/domain/testing/formula';
+import { EU_ALLERGENS } from '../../../src/lib/reference';
+
+export const listOf = (
+	materials: Materials,
+	formulas: Formulas,
+	{ stay = 'leave-on', day = '2026-12-01', formula = 'F' }: { stay?: Stay; day?: string; formula?: string } = {}
+): IngredientList =>
+	ingredientList(composed(materials, formulas, formula), {
+		market: 'EU',
+		stay,
+		batchDay: day as IsoDate,
+		substances: substancesOf(materials),
+		allergens: EU_ALLERGENS
+	});
+
+/** The typical share of a name in %, exact. */
+export function shareOf(list: IngredientList, name: string): string | undefined {
+	const entry = list.entries.find((each) => each.name === name);
+	return entry && formatExact(entry.share.typical, list.shareDecimals);
+}
+
+export const namesIn = (list: IngredientList, ...blocks: string[]) =>
+	list.entries.filter((entry) => blocks.includes(entry.block)).map((entry) => entry.name);

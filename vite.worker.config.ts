@@ -18,7 +18,8 @@ export default defineConfig({
 				'pdf-child': at('src/lib/server/pdf/child.ts'),
 				migrate: at('scripts/migrate.ts'),
 				demo: at('scripts/demo.ts'),
-				'verify-audit': at('scripts/verify-audit.ts')
+				'verify-audit': at('scripts/verify-audit.ts'),
+				bench: at('scripts/bench.ts')
 			}
 		}
 	}

@@ -1,8 +1,7 @@
-import { sql } from 'kysely';
-import { handle } from '$lib/server/db/pool';
+import { answers } from '$lib/server/db/migrated';
 import type { RequestHandler } from './$types';
 
 export const GET: RequestHandler = async () => {
-	await sql`select 1`.execute(handle());
+	await answers();
 	return new Response('ok', { headers: { 'content-type': 'text/plain', 'cache-control': 'no-store' } });
 };

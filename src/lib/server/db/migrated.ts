@@ -12,3 +12,8 @@ export async function requireMigrated(): Promise<void> {
 		throw new Error(`The database lacks the migration ${NEWEST_MIGRATION}. Run: npm run migrate`);
 	}
 }
+
+/** Returns when the database answers; throws when it does not. */
+export async function answers(): Promise<void> {
+	await sql`select 1`.execute(handle());
+}

@@ -27,9 +27,9 @@ function material(line: number): MaterialVersion {
 			id: `${id}/${part}` as Id<'constituent'>,
 			substance: substanceOf(line, part),
 			declared: {
-				low: 1_000_000_000n as PartShare,
+				low: 3_000_000_000n as PartShare,
 				typical: null,
-				high: 2_000_000_000n as PartShare,
+				high: 3_600_000_000n as PartShare,
 				highOpen: false
 			},
 			nano: false,

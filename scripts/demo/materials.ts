@@ -48,11 +48,7 @@ export const DEMO_MATERIALS: readonly DemoMaterial[] = [
 		code: 'QX-CA1',
 		tradeName: 'Quillex Centella 1',
 		supplier: SUPPLIERS.quill,
-		parts: [
-			row('Propanediol', '60', '504-63-2'),
-			row('Aqua', '39', AQUA),
-			row('Centella Asiatica Extract', '1', '84696-21-7')
-		]
+		parts: [row('Propanediol', '60', '504-63-2'), row('Aqua', '39', AQUA), row('Centella Asiatica Extract', '1')]
 	},
 	{ code: 'NCR-N', tradeName: 'Niacarrow N', supplier: SUPPLIERS.thorn, parts: whole('Niacinamide', '98-92-0') },
 	{ code: 'XT-20', tradeName: 'Xanthar T', supplier: SUPPLIERS.thorn, parts: whole('Xanthan Gum', '11138-66-2') },

@@ -1,0 +1,85 @@
+import { PAGE_SIZE, type ListQuery, type Page } from '$lib/schemas/paging';
+import type { PersonInput } from '$lib/schemas/person';
+import { requireAct } from '../access/acts';
+import type { Actor, Role } from '../access/actor';
+import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
+import { hashPassword } from '../auth/passwords';
+import { newId } from '../db/id';
+import { listClients, listPeople, type ClientRow, type PersonRow } from '../db/people';
+import { withActor } from '../db/with-actor';
+import { Refused } from '../refused';
+
+const WORKSPACE = { kind: 'workspace', id: WORKSPACE_SUBJECT } as const;
+
+export interface PeopleView {
+	readonly people: Page<PersonRow>;
+	readonly clients: readonly ClientRow[];
+}
+
+export function readPeople(actor: Actor, query: ListQuery): Promise<PeopleView> {
+	requireAct(actor, 'managePeople');
+	return withActor(actor, async (trx) => {
+		const { rows, total } = await listPeople(trx, query);
+		return {
+			people: { rows, total, page: query.page, pageSize: PAGE_SIZE },
+			clients: await listClients(trx)
+		};
+	});
+}
+
+/** @throws Refused 'exists' when a client of that name is there. */
+export function addClient(actor: Actor, name: string): Promise<string> {
+	requireAct(actor, 'managePeople');
+	return withActor(actor, async (trx) => {
+		const id = newId();
+		const { numInsertedOrUpdatedRows } = await trx
+			.insertInto('client')
+			.values({ id, name, created_by: actor.personId })
+			.onConflict((conflict) => conflict.column('name').doNothing())
+			.executeTakeFirstOrThrow();
+		if (!numInsertedOrUpdatedRows) throw new Refused('exists', { field: 'clientName', value: name });
+		await audit(trx, actor, { stream: WORKSPACE, action: 'client-added', subject: `client/${id}`, after: { name } });
+		return id;
+	});
+}
+
+/** @throws Refused 'exists' when somebody signs in with that e-mail already. */
+export async function addPerson(actor: Actor, input: PersonInput): Promise<string> {
+	requireAct(actor, 'managePeople');
+	const passwordHash = await hashPassword(input.password);
+	return withActor(actor, async (trx) => {
+		const id = newId();
+		const email = input.email.toLowerCase();
+		const { numInsertedOrUpdatedRows } = await trx
+			.insertInto('person')
+			.values({ id, email, name: input.name, password_hash: passwordHash, created_by: actor.personId })
+			.onConflict((conflict) => conflict.column('email').doNothing())
+			.executeTakeFirstOrThrow();
+		if (!numInsertedOrUpdatedRows) throw new Refused('exists', { field: 'email', value: email });
+		const roles: readonly Role[] = input.clientId ? ['client'] : input.roles;
+		await trx
+			.insertInto('membership')
+			.values(
+				roles.map((role) => ({
+					person_id: id,
+					role,
+					client_id: role === 'client' ? input.clientId : null,
+					created_by: actor.personId
+				}))
+			)
+			.execute();
+		await audit(trx, actor, {
+			stream: WORKSPACE,
+			action: 'person-added',
+			subject: `person/${id}`,
+			after: { roles, clientId: input.clientId || null }
+		});
+		return id;
+	});
+}
+
+/** The clients a product may be made for; officers choose among them. */
+export function readClients(actor: Actor): Promise<readonly ClientRow[]> {
+	requireAct(actor, 'readLaboratory');
+	return withActor(actor, listClients);
+}

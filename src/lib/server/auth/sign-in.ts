@@ -39,7 +39,10 @@ export async function signIn(credentials: Credentials, address: string, now: Dat
 	return openSession(personId);
 }
 
-export function recordAtTheDoor(personId: string, action: 'signed-in' | 'signed-out' | 'token-issued'): Promise<unknown> {
+export function recordAtTheDoor(
+	personId: string,
+	action: 'signed-in' | 'signed-out' | 'token-issued'
+): Promise<unknown> {
 	const actor = systemActor(personId);
 	return withActor(actor, (trx) =>
 		audit(trx, actor, { stream: { kind: 'workspace', id: WORKSPACE_SUBJECT }, action, subject: `person/${personId}` })

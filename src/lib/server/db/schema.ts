@@ -14,23 +14,12 @@ type NullableJson<T> = ColumnType<T | null, string | null | undefined, string | 
 type Made = { created_at: Generated<Date>; created_by: string };
 
 export type CopyState =
-	| 'draft'
-	| 'inReview'
-	| 'sentBack'
-	| 'approvedByLaboratory'
-	| 'approvedByClient'
-	| 'inUse'
-	| 'superseded';
+	'draft' | 'inReview' | 'sentBack' | 'approvedByLaboratory' | 'approvedByClient' | 'inUse' | 'superseded';
 export type Market = 'EU' | 'GB' | 'US' | 'CA' | 'AU' | 'ASEAN' | 'CH';
 export type SubstanceUse = 'colourant' | 'uvFilter' | 'hairDye' | 'preservative' | 'other';
 export type PartRole = 'ingredient' | 'carryOver' | 'impurity' | 'processingAid';
 export type Criterion =
-	| 'legalCompliance'
-	| 'truthfulness'
-	| 'evidentialSupport'
-	| 'honesty'
-	| 'fairness'
-	| 'informedDecision';
+	'legalCompliance' | 'truthfulness' | 'evidentialSupport' | 'honesty' | 'fairness' | 'informedDecision';
 
 interface ClientTable {
 	id: string;

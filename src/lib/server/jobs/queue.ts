@@ -56,17 +56,21 @@ export async function enqueue<Q extends QueueName>(
 		.values({ job_id: jobId, kind: queue, subject, person_id: actor.personId, state: 'queued' })
 		.execute();
 	const boss = await startQueue({ supervises: false });
-	await boss.send(queue, { ...data, jobId, personId: actor.personId }, {
-		id: jobId,
-		retryLimit: 2,
-		retryBackoff: true,
-		expireInSeconds: 600,
-		db: {
-			executeSql: async (text: string, values: unknown[]) => {
-				const result = await trx.executeQuery(CompiledQuery.raw(text, values));
-				return { rows: [...result.rows], rowCount: result.rows.length };
+	await boss.send(
+		queue,
+		{ ...data, jobId, personId: actor.personId },
+		{
+			id: jobId,
+			retryLimit: 2,
+			retryBackoff: true,
+			expireInSeconds: 600,
+			db: {
+				executeSql: async (text: string, values: unknown[]) => {
+					const result = await trx.executeQuery(CompiledQuery.raw(text, values));
+					return { rows: [...result.rows], rowCount: result.rows.length };
+				}
 			}
 		}
-	});
+	);
 	return jobId;
 }

@@ -3,7 +3,8 @@ import type { AllergenRow } from '../schemas/reference';
 /**
  * Fragrance allergens that the list must name: Annex III of Regulation (EC) No 1223/2009 as amended by (EU) 2023/1545,
  * state of the Commission's export of 31 October 2025. Columns: entry, name on the label, whether the entry was already named
- * before (EU) 2023/1545, member names, CAS numbers of the members. Thresholds are the same for all and stand in the loader.
+ * before (EU) 2023/1545, member names, usual chemical names of members beside them,
+ * CAS numbers of the members. Thresholds are the same for all and stand in the loader.
  */
 export const ALLERGEN_ROWS: readonly AllergenRow[] = [
 	{ entry: '45', labelName: 'Benzyl Alcohol', before2023: true, members: ['Benzyl Alcohol'], cas: ['100-51-6'] },
@@ -155,6 +156,7 @@ export const ALLERGEN_ROWS: readonly AllergenRow[] = [
 			'cis-Rose Ketone 2',
 			'trans-Rose Ketone 2'
 		],
+		alsoKnown: ['Beta-Damascone', 'Delta-Damascone', 'Damascenone'],
 		cas: [
 			'43052-87-5',
 			'23726-94-5',
@@ -470,6 +472,7 @@ export const ALLERGEN_ROWS: readonly AllergenRow[] = [
 		labelName: 'Pinene',
 		before2023: false,
 		members: ['Pinene'],
+		alsoKnown: ['Alpha-Pinene', 'Beta-Pinene'],
 		cas: ['80-56-8', '7785-70-8', '127-91-3', '18172-67-3']
 	}
 ];

@@ -8,6 +8,13 @@ const CLAIMS = 'Regulation (EU) No 655/2013';
 /** Short texts in our own words; the official text prevails. */
 const COSMETICS_ROWS: readonly Row[] = [
 	[
+		'art-2-1-a',
+		'Art. 2(1)(a)',
+		'Cosmetic product',
+		'A substance or mixture for the outside of the body, the teeth or the mouth, meant only or mainly to clean, perfume, change the appearance, protect, keep in good condition or correct odours.',
+		'fromMemory'
+	],
+	[
 		'art-3',
 		'Art. 3',
 		'Safety',
@@ -67,6 +74,12 @@ const COSMETICS_ROWS: readonly Row[] = [
 		'Art. 13',
 		'Notification',
 		'Before placing, the product is notified with category, names, responsible person, contact, and the particulars that the article lists.'
+	],
+	[
+		'art-16',
+		'Art. 16',
+		'Nanomaterials',
+		'Products with nanomaterials other than those permitted as colourants, UV filters or preservatives or meeting Annex III are notified six months before placing.'
 	],
 	[
 		'art-17',
@@ -134,6 +147,12 @@ const COSMETICS_ROWS: readonly Row[] = [
 		'Art. 20',
 		'Claims',
 		'Texts, names, pictures and signs must not imply characteristics or functions that the product does not have.'
+	],
+	[
+		'art-21',
+		'Art. 21',
+		'Access for the public',
+		'The composition, quantities of hazardous substances only, perfume by name, code and supplier, and data on undesirable effects are easily accessible to the public.'
 	],
 	[
 		'art-23',
@@ -230,6 +249,18 @@ const COSMETICS_ROWS: readonly Row[] = [
 		'Annex I, B 4',
 		'Assessor and approval',
 		'Name, address and proof of qualification of the assessor, date and signature.'
+	],
+	[
+		'annexes-ii-vi-preamble',
+		'Preamble to Annexes II to VI',
+		'Terms of the annexes',
+		'Rinse-off products are removed after application, leave-on products stay in contact; kinds of product, parts of the body and professional use are defined. Entries of Annexes III to VI do not cover nano forms unless they say so.'
+	],
+	[
+		'annex-vii',
+		'Annex VII',
+		'Symbols',
+		'Hand in book: enclosed or attached information. Open jar: period after opening. Hourglass: date of minimum durability.'
 	]
 ];
 

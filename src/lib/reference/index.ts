@@ -27,7 +27,8 @@ const rows = z.array(allergenRowSchema).parse(ALLERGEN_ROWS);
 export const EU_ALLERGENS: readonly Allergen[] = rows.map((row) => ({
 	ruleId: `${COSMETICS_ACT}/${allergenEntry(row)}`,
 	labelName: row.labelName,
-	members: row.members.map((inci, at) => ({ inci, cas: at === 0 ? row.cas : [] })),
+	// The annex gives numbers for the entry, not per name; an entry is found by any of them.
+	members: [...row.members, ...(row.alsoKnown ?? [])].map((inci, at) => ({ inci, cas: at === 0 ? row.cas : [] })),
 	leaveOnAbove: LEAVE_ON_ABOVE,
 	rinseOffAbove: RINSE_OFF_ABOVE,
 	placedFrom: row.before2023 ? null : (NEW_NAMES_FROM as Allergen['placedFrom'])

@@ -23,6 +23,8 @@ export const allergenRowSchema = z.object({
 	labelName: z.string().min(1),
 	before2023: z.boolean(),
 	members: z.array(z.string().min(1)).min(1),
+	/** Names that suppliers write for members whose name in the annex is another. */
+	alsoKnown: z.array(z.string().min(1)).optional(),
 	cas: z.array(z.string().regex(/^\d{2,7}-\d{2}-\d$/))
 });
 export type AllergenRow = z.infer<typeof allergenRowSchema>;

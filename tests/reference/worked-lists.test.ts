@@ -1,16 +1,10 @@
 import { describe, expect, test } from 'vitest';
 import { formatRatio } from '../../src/lib/domain/quantity/ratio';
-import type { Formulas, Materials } from '../../src/lib/domain/testing/formula';
-import { listOf, namesIn, shareOf } from './support/list';
+import type { Materials } from '../../src/lib/domain/testing/formula';
+import { formula, listOf, namesIn, parts, pure, shareOf } from './support/list';
 
 // Source of every expected list: the fact base, B.6 "Worked ingredient lists" (original formulas, arithmetic checked by script),
 // after Regulation (EC) No 1223/2009, Art. 19(1)(g) and Annex III as amended by (EU) 2023/1545.
-const pure = (inci: string) => [{ inci, typical: '100' }];
-const parts = (...all: [string, string][]) => all.map(([inci, typical]) => ({ inci, typical }));
-const formula = (...lines: [string, string][]): Formulas => ({
-	F: lines.map(([material, percent]) => ({ material, percent }))
-});
-
 describe('formula 1: day cream, leave-on', () => {
 	const materials: Materials = {
 		water: pure('Aqua'),
@@ -184,6 +178,74 @@ describe('formula 3: sun fluid with a nano dispersion', () => {
 	])('%s sums to %s %%', (name, percent) => expect(shareOf(list, name)).toBe(percent));
 });
 
+describe('formula 4: tinted lip balm, shade A alone', () => {
+	const paste = (pigment: string) => [
+		{ inci: 'Ricinus Communis Seed Oil', typical: '50' },
+		{ inci: pigment, typical: '50', use: 'colourant' as const }
+	];
+	const materials: Materials = {
+		castor: pure('Ricinus Communis Seed Oil'),
+		octyldodecanol: pure('Octyldodecanol'),
+		candelilla: pure('Candelilla Cera'),
+		shea: pure('Butyrospermum Parkii Butter'),
+		beeswax: pure('Cera Alba'),
+		carnauba: pure('Copernicia Cerifera Cera'),
+		filler: parts(['Mica', '70'], ['Silica', '30']),
+		aroma: [
+			{ inci: 'Aroma', typical: '100' },
+			...parts(['Vanillin', '20'], ['Benzyl Alcohol', '1.0'], ['Anethole', '0.1']).map((each) => ({
+				...each,
+				ofWhich: 'Aroma'
+			}))
+		],
+		antioxidant: parts(['Tocopherol', '70'], ['Helianthus Annuus Seed Oil', '30']),
+		white: paste('CI 77891'),
+		red: paste('CI 77491')
+	};
+	const list = listOf(
+		materials,
+		formula(
+			['castor', '30'],
+			['octyldodecanol', '20'],
+			['candelilla', '12'],
+			['shea', '10'],
+			['beeswax', '8'],
+			['carnauba', '7'],
+			['filler', '2'],
+			['aroma', '0.5'],
+			['antioxidant', '0.5'],
+			['white', '6'],
+			['red', '4']
+		)
+	);
+
+	test('the ordered block; mica as filler keeps its name', () => {
+		expect(namesIn(list, 'ordered')).toEqual([
+			'Ricinus Communis Seed Oil',
+			'Octyldodecanol',
+			'Candelilla Cera',
+			'Butyrospermum Parkii Butter',
+			'Cera Alba',
+			'Copernicia Cerifera Cera',
+			'Mica'
+		]);
+		expect(shareOf(list, 'Ricinus Communis Seed Oil')).toBe('35');
+	});
+	test('the free part and the colourants; Anethole at 0.0005 % is not named', () => {
+		expect(new Set(namesIn(list, 'free'))).toEqual(
+			new Set(['Silica', 'Aroma', 'Tocopherol', 'Helianthus Annuus Seed Oil', 'Benzyl Alcohol', 'Vanillin'])
+		);
+		expect(namesIn(list, 'colourant')).toEqual(['CI 77491', 'CI 77891']);
+		expect(list.leftOut).toMatchObject([{ name: 'Anethole', reason: 'allergenAtOrBelow' }]);
+	});
+	test.each([
+		['CI 77891', '3'],
+		['CI 77491', '2'],
+		['Vanillin', '0.1'],
+		['Benzyl Alcohol', '0.005']
+	])('%s sums to %s %%', (name, percent) => expect(shareOf(list, name)).toBe(percent));
+});
+
 describe('formula 5: serum whose order depends on a supplier’s range', () => {
 	const materials: Materials = {
 		water: pure('Aqua'),
@@ -258,71 +320,5 @@ describe('formula 5: serum whose order depends on a supplier’s range', () => {
 	test('the peptide is at most 0.004 % in the product', () => {
 		const peptide = list.entries.find((entry) => entry.name === 'Palmitoyl Tripeptide-1');
 		expect(peptide?.share.high).toBe(40_000_000_000_000n);
-	});
-});
-
-describe('edges (fact base, B.6 "Extra edge tests")', () => {
-	test('1.0000 % is ordered and 0.9999 % is free, on the full sum', () => {
-		const materials = { water: pure('Aqua'), a: pure('Betaine'), b: pure('Panthenol') };
-		const list = listOf(materials, formula(['water', '98.0001'], ['a', '1.0000'], ['b', '0.9999']));
-		expect(namesIn(list, 'ordered')).toEqual(['Aqua', 'Betaine']);
-		expect(namesIn(list, 'free')).toEqual(['Panthenol']);
-	});
-	test('a hair dye stands in the weight order, a colourant at the end', () => {
-		const materials: Materials = {
-			water: pure('Aqua'),
-			dye: [{ inci: 'Basic Red 51', typical: '100', use: 'hairDye' }],
-			pigment: [{ inci: 'CI 77491', typical: '100', use: 'colourant' }],
-			thickener: pure('Xanthan Gum')
-		};
-		const list = listOf(materials, formula(['water', '90'], ['pigment', '6'], ['dye', '3'], ['thickener', '1']));
-		expect(list.text).toBe('Aqua, Basic Red 51, Xanthan Gum, CI 77491');
-	});
-	test('a name of (EU) 2023/1545 is printed from the batch of 1 August 2026', () => {
-		const materials: Materials = {
-			water: pure('Aqua'),
-			perfume: [
-				{ inci: 'Parfum', typical: '100' },
-				{ inci: 'Linalyl Acetate', typical: '3', ofWhich: 'Parfum' }
-			]
-		};
-		const formulas = formula(['water', '99.6'], ['perfume', '0.4']);
-		expect(listOf(materials, formulas, { day: '2026-07-31' }).text).toBe('Aqua, Parfum');
-		expect(listOf(materials, formulas, { day: '2026-08-01' }).text).toBe('Aqua, Parfum, Linalyl Acetate');
-	});
-	test('thresholds are exceeded, not reached: exactly 0.001 % in a leave-on product is not named', () => {
-		const materials: Materials = {
-			water: pure('Aqua'),
-			perfume: [
-				{ inci: 'Parfum', typical: '100' },
-				{ inci: 'Coumarin', typical: '1', ofWhich: 'Parfum' }
-			]
-		};
-		expect(listOf(materials, formula(['water', '99.9'], ['perfume', '0.1'])).text).toBe('Aqua, Parfum');
-		expect(listOf(materials, formula(['water', '99.89'], ['perfume', '0.11'])).text).toBe('Aqua, Parfum, Coumarin');
-	});
-	test('one group name for several damascones, summed: Rose Ketones (Annex III, 157)', () => {
-		const materials: Materials = {
-			water: pure('Aqua'),
-			perfume: [
-				{ inci: 'Parfum', typical: '100' },
-				{ inci: 'Alpha-Damascone', typical: '0.6', ofWhich: 'Parfum' },
-				{ inci: 'Beta-Damascone', typical: '0.6', ofWhich: 'Parfum', cas: '23726-91-2' }
-			]
-		};
-		expect(listOf(materials, formula(['water', '99.9'], ['perfume', '0.1'])).text).toBe('Aqua, Parfum, Rose Ketones');
-	});
-	test('benzyl alcohol as preservative and in the perfume stands once, with both amounts', () => {
-		const materials: Materials = {
-			water: pure('Aqua'),
-			preservative: [{ inci: 'Benzyl Alcohol', typical: '100', use: 'preservative' }],
-			perfume: [
-				{ inci: 'Parfum', typical: '100' },
-				{ inci: 'Benzyl Alcohol', typical: '5', ofWhich: 'Parfum' }
-			]
-		};
-		const list = listOf(materials, formula(['water', '98.9'], ['preservative', '0.9'], ['perfume', '0.2']));
-		expect(list.text).toBe('Aqua, Benzyl Alcohol, Parfum');
-		expect(shareOf(list, 'Benzyl Alcohol')).toBe('0.91');
 	});
 });

@@ -5,6 +5,13 @@ import type { IsoDate } from '../../../src/lib/domain/quantity/units';
 import { composed, substancesOf, type Formulas, type Materials } from '../../../src/lib/domain/testing/formula';
 import { EU_ALLERGENS } from '../../../src/lib/reference';
 
+/** Shorthands for materials of one constituent or of several, and for a formula by its lines. */
+export const pure = (inci: string) => [{ inci, typical: '100' }];
+export const parts = (...all: [string, string][]) => all.map(([inci, typical]) => ({ inci, typical }));
+export const formula = (...lines: [string, string][]): Formulas => ({
+	F: lines.map(([material, percent]) => ({ material, percent }))
+});
+
 export const listOf = (
 	materials: Materials,
 	formulas: Formulas,

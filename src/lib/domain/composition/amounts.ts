@@ -52,7 +52,14 @@ interface Family {
 }
 
 /** Share of one material that the selected constituents make up together; the high is reached unless it is open. */
-function fractionOf(material: WeighedMaterial, select: Select): Estimate<PartShare> {
+export function fractionOf(material: WeighedMaterial, select: Select): Estimate<PartShare> {
+	const own = material.parts.filter(select);
+	// A single constituent's own range is already the exact one.
+	if (own.length === 1 && own[0]) return own[0].share;
+	return jointFraction(material, select);
+}
+
+function jointFraction(material: WeighedMaterial, select: Select): Estimate<PartShare> {
 	const families = material.parts
 		.filter((part) => part.role !== 'ofWhich')
 		.map((part) => familyOf(part, material, select));

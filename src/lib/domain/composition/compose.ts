@@ -165,6 +165,17 @@ function contribute(
 
 type CompositionRowIdentity = Pick<CompositionRow, 'substance' | 'nano' | 'use'>;
 
+/** The materials that bring a row, so that no row looks through all of them. */
+function carriersOf(weighed: readonly WeighedMaterial[]): ReadonlyMap<string, readonly WeighedMaterial[]> {
+	const found = new Map<string, WeighedMaterial[]>();
+	for (const material of weighed) {
+		for (const key of new Set(material.parts.map((part) => part.rowKey))) {
+			found.set(key, [...(found.get(key) ?? []), material]);
+		}
+	}
+	return found;
+}
+
 function rowsOf(
 	contributions: readonly (Contribution & { readonly rowKey: string; readonly row: CompositionRowIdentity })[],
 	weighed: readonly WeighedMaterial[]
@@ -175,11 +186,12 @@ function rowsOf(
 		group.of.push(contribution);
 		grouped.set(key, group);
 	}
+	const carriers = carriersOf(weighed);
 	return [...grouped].map(([key, { identity, of }]) => ({
 		key,
 		...identity,
 		roles: new Set(of.map((contribution) => contribution.role)),
-		share: amountOf(weighed, (part) => part.rowKey === key),
+		share: amountOf(carriers.get(key) ?? [], (part) => part.rowKey === key),
 		contributions: of
 	}));
 }

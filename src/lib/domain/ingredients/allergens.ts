@@ -30,8 +30,8 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 	const present = new Set(composition.rows.map((row) => row.substance));
 	const identities = [...request.substances.values()].filter((identity) => present.has(identity.id));
 	const members = membersOf(identities, request.allergens);
-	return request.allergens.flatMap((entry) => {
-		const substances = members(entry);
+	return request.allergens.flatMap((entry, at) => {
+		const substances = members[at] ?? new Set();
 		if (substances.size === 0) return [];
 		const share = amountOf(composition.weighed, (part) => substances.has(part.substance) && isSource(part));
 		if (share.high === 0n) return [];
@@ -49,19 +49,39 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 	});
 }
 
+interface EntryKeys {
+	readonly keys: ReadonlySet<string>;
+	readonly numbers: ReadonlySet<string>;
+}
+/** Keys cost more than everything else here, and the same rows are read for every list. */
+const KNOWN = new WeakMap<
+	readonly AllergenEntry[],
+	{ readonly all: ReadonlySet<string>; readonly of: readonly EntryKeys[] }
+>();
+
+function keysOf(allergens: readonly AllergenEntry[]) {
+	const known = KNOWN.get(allergens);
+	if (known) return known;
+	const of = allergens.map(({ labelName, members }) => ({
+		keys: new Set([labelName, ...members.map(({ inci }) => inci)].map(substanceKey)),
+		numbers: new Set(members.flatMap(({ cas }) => cas))
+	}));
+	const made = { all: new Set(of.flatMap(({ keys }) => [...keys])), of };
+	KNOWN.set(allergens, made);
+	return made;
+}
+
 /**
  * By name first; by CAS number only where no entry knows the name, because an oil of the flower and an oil of the peel can share
  * one number.
  */
 function membersOf(identities: readonly SubstanceIdentity[], allergens: readonly AllergenEntry[]) {
-	const names = new Set(allergens.flatMap(keysOf));
-	return (entry: AllergenEntry): ReadonlySet<Id<'substance'>> => {
-		const keys = new Set(keysOf(entry));
-		const numbers = new Set(entry.members.flatMap(({ cas }) => cas));
-		const isMember = ({ key, cas }: SubstanceIdentity) =>
-			keys.has(key) || (!names.has(key) && cas.some((number) => numbers.has(number)));
-		return new Set(identities.filter(isMember).map(({ id }) => id));
-	};
+	const { all, of } = keysOf(allergens);
+	const unnamed = identities.filter(({ key, cas }) => cas.length > 0 && !all.has(key));
+	const named = identities.filter(({ key }) => all.has(key));
+	return of.map(({ keys, numbers }): ReadonlySet<Id<'substance'>> => {
+		const byName = named.filter(({ key }) => keys.has(key));
+		const byNumber = unnamed.filter(({ cas }) => cas.some((number) => numbers.has(number)));
+		return new Set([...byName, ...byNumber].map(({ id }) => id));
+	});
 }
-
-const keysOf = (entry: AllergenEntry) => [entry.labelName, ...entry.members.map(({ inci }) => inci)].map(substanceKey);

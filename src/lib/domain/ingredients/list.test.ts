@@ -207,17 +207,15 @@ const constituent = fc.record({
 	weight: fc.integer({ min: 1, max: 20 }),
 	role: fc.constantFrom('ingredient' as const, 'carryOver' as const, 'impurity' as const, 'processingAid' as const)
 });
-const material = fc
-	.array(constituent, { minLength: 1, maxLength: 5 })
-	.map((parts): Part[] => [
-		{ inci: 'Base' },
-		...parts.map(({ inci, weight, role }): Part => ({
-			inci,
-			typical: `${weight / 2}`,
-			role,
-			use: inci.startsWith('CI') ? 'colourant' : 'other'
-		}))
-	]);
+const material = fc.array(constituent, { minLength: 1, maxLength: 5 }).map((parts): Part[] => [
+	{ inci: 'Base' },
+	...parts.map(({ inci, weight, role }): Part => ({
+		inci,
+		typical: `${weight / 2}`,
+		role,
+		use: inci.startsWith('CI') ? 'colourant' : 'other'
+	}))
+]);
 const materials = fc.record({ a: material, b: material });
 const LINES = [line('a', '3'), line('b', '0.7')];
 

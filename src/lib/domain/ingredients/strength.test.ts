@@ -106,6 +106,20 @@ describe('weak pairs', () => {
 		);
 		expect(pairs).toMatchObject([{ before: 'B', after: 'C', strength: 'undecided' }]);
 	});
+	test('a range line turns an order too; no supplier can settle that', () => {
+		const materials = { water, a: pure('A'), b: pure('B') };
+		const lines = (max: string) => ({
+			F: [
+				{ material: 'a', percent: '4' },
+				{ material: 'b', percent: '3', max },
+				{ material: 'water', qs: true }
+			]
+		});
+		expect(weak(materials, lines('4'), ['Aqua', 'A', 'B'])).toEqual([]);
+		expect(weak(materials, lines('5'), ['Aqua', 'A', 'B'])).toEqual([
+			{ before: 'A', after: 'B', strength: 'restsOnTypical', turnsAt: null, ask: null }
+		]);
+	});
 	test('a perfume is never outweighed by an allergen inside it', () => {
 		const perfume: Part[] = [
 			{ inci: 'Parfum', min: '40', max: '90' },

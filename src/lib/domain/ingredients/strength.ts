@@ -1,9 +1,12 @@
+import { fractionOf } from '../composition/amounts';
 import type { Composition, WeighedMaterial, WeighedPart } from '../composition/types';
 import type { Estimate } from '../quantity/range';
 import { least, most, WHOLE_PART, type Percent } from '../quantity/units';
 import { hull, minkowski, reachesAbove, type Point } from './polygon';
-import { describe } from './turning';
+import { describe, rangedParts, type RangedPart, type Span, type Stake } from './turning';
 import type { PlacedName, WeakPair } from './types';
+
+const NONE: Span = { low: 0n, high: 0n };
 
 /**
  * Every pair i printed before j for which some composition within the suppliers' ranges has x_j > x_i with x_j in the ordered
@@ -15,12 +18,13 @@ export function weakPairs(
 	placed: readonly PlacedName[],
 	orderedFrom: bigint
 ): readonly WeakPair[] {
-	return placed.flatMap((before, at) =>
-		placed
+	const stakes = placed.map((name) => stakeOf(composition, name));
+	return stakes.flatMap((before, at) =>
+		stakes
 			.slice(at + 1)
 			.filter(({ share }) => canBeOrdered(share, orderedFrom) && share.high > before.share.low)
-			.filter((after) => canTurn(composition, before, after, orderedFrom))
-			.map((after) => describe(composition, before, after, orderedFrom))
+			.filter((after) => canTurn(before, after, orderedFrom))
+			.map((after) => describe(before, after, orderedFrom))
 	);
 }
 
@@ -28,20 +32,68 @@ export function weakPairs(
 const canBeOrdered = (share: Estimate<Percent>, orderedFrom: bigint) =>
 	share.high > orderedFrom || (share.high === orderedFrom && !share.highOpen);
 
-function canTurn(composition: Composition, before: PlacedName, after: PlacedName, orderedFrom: bigint): boolean {
-	const corners = composition.weighed[0]?.corners.length ?? 0;
-	const touched = composition.weighed
-		.map((material) => ({ material, shape: shapeOf(material, before, after) }))
-		.filter(({ shape }) => shape.length > 1 || shape.some((point) => point.x !== 0n || point.y !== 0n));
-	const polygons = Array.from({ length: corners }, (_, corner) =>
-		touched.reduce<readonly Point[]>(
-			(sum, { material, shape }) => minkowski(sum, scaled(shape, material.corners[corner] ?? 0n)),
-			[{ x: 0n, y: 0n }]
-		)
-	);
-	return reachesAbove(hull(polygons.flat()), orderedFrom);
+function stakeOf(composition: Composition, name: PlacedName): Stake {
+	const held = new Map<WeighedMaterial, Span>();
+	const ranged: RangedPart[] = [];
+	for (const material of composition.weighed) {
+		const parts = material.parts.filter(name.select);
+		if (parts.length === 0) continue;
+		held.set(material, fractionOf(material, name.select));
+		ranged.push(...rangedParts(material, parts));
+	}
+	const count = composition.weighed[0]?.corners.length ?? 0;
+	const ends = Array.from({ length: count }, (_, corner) => spanAt([...held.keys()], held, corner));
+	return { ...name, held, ends, ranged };
 }
 
+const spanAt = (
+	materials: readonly WeighedMaterial[],
+	held: ReadonlyMap<WeighedMaterial, Span>,
+	corner: number
+): Span =>
+	materials.reduce<Span>(({ low, high }, material) => {
+		const weight = material.corners[corner] ?? 0n;
+		const span = held.get(material) ?? NONE;
+		return { low: low + weight * span.low, high: high + weight * span.high };
+	}, NONE);
+
+/** Materials in which both names can vary; everywhere else the one does not depend on the other. */
+const sharedBy = (before: Stake, after: Stake): readonly WeighedMaterial[] =>
+	[...before.held]
+		.filter(([material, span]) => varies(span) && varies(after.held.get(material) ?? NONE))
+		.map(([material]) => material);
+const varies = ({ low, high }: Span) => low < high;
+
+function canTurn(before: Stake, after: Stake, orderedFrom: bigint): boolean {
+	const shared = sharedBy(before, after);
+	const shapes = new Map(shared.map((material) => [material, shapeOf(material, before, after)]));
+	const outlines: (readonly Point[])[] = [];
+	for (const [corner, x] of before.ends.entries()) {
+		const y = after.ends[corner] ?? NONE;
+		const apart = boxOf(
+			without(x, spanAt(shared, before.held, corner)),
+			without(y, spanAt(shared, after.held, corner))
+		);
+		const outline = shared.reduce<readonly Point[]>(
+			(sum, material) => minkowski(sum, scaled(shapes.get(material) ?? [], material.corners[corner] ?? 0n)),
+			apart
+		);
+		if (reachesAbove(outline, orderedFrom)) return true;
+		outlines.push(outline);
+	}
+	return before.ends.length > 1 && reachesBetween(outlines, orderedFrom);
+}
+
+/** Between the corners of range lines: only where some corner is ordered and another one turned can a mixture be both. */
+function reachesBetween(outlines: readonly (readonly Point[])[], orderedFrom: bigint): boolean {
+	const points = outlines.flat();
+	if (!points.some(({ y }) => y >= orderedFrom) || !points.some(({ x, y }) => y > x)) return false;
+	return reachesAbove(hull(points), orderedFrom);
+}
+
+const without = (all: Span, part: Span): Span => ({ low: all.low - part.low, high: all.high - part.high });
+const boxOf = (x: Span, y: Span): readonly Point[] =>
+	hull([x.low, x.high].flatMap((a) => [y.low, y.high].map((b) => ({ x: a, y: b }))));
 const scaled = (shape: readonly Point[], by: bigint) => shape.map((point) => ({ x: point.x * by, y: point.y * by }));
 
 /** The pairs (share of the one, share of the other) within one material: box ∩ strip, then the parts of parts. */
@@ -103,10 +155,6 @@ const pointsAt = (shape: readonly Point[], x: bigint): readonly Point[] =>
 		return [{ x, y: from.y + ((to.y - from.y) * (x - from.x)) / (to.x - from.x) }];
 	});
 
-interface Span {
-	readonly low: bigint;
-	readonly high: bigint;
-}
 const span = (parts: readonly WeighedPart[]): Span =>
 	parts.reduce<Span>((sum, { share }) => ({ low: sum.low + share.low, high: sum.high + share.high }), {
 		low: 0n,

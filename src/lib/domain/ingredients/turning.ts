@@ -3,38 +3,42 @@ import { compareRatios, ratio } from '../quantity/ratio';
 import { compare, most, type Ratio } from '../quantity/units';
 import type { PlacedName, WeakPair } from './types';
 
-interface RangedPart {
+export interface Span {
+	readonly low: bigint;
+	readonly high: bigint;
+}
+export interface RangedPart {
 	readonly material: WeighedMaterial;
 	readonly part: WeighedPart;
 	readonly width: bigint;
 }
+/** A placed name with what it holds of each material, worked out once for all its pairs. */
+export interface Stake extends PlacedName {
+	readonly held: ReadonlyMap<WeighedMaterial, Span>;
+	/** Lowest and highest share of the formula at every corner of the range lines. */
+	readonly ends: readonly Span[];
+	readonly ranged: readonly RangedPart[];
+}
 
-/** The selected constituents that a supplier left open, by how far each moves the formula: weight × width, widest first. */
-const ranged = (composition: Composition, select: (part: WeighedPart) => boolean): readonly RangedPart[] =>
-	composition.weighed
-		.flatMap((material) =>
-			material.parts
-				.filter(select)
-				.map((part) => ({ material, part, width: material.typicalWeight * (part.share.high - part.share.low) }))
-		)
-		.filter(({ width }) => width > 0n)
-		.sort((a, b) => compare(b.width, a.width));
+/** What a supplier left open, with how far each moves the formula: weight × width. */
+export const rangedParts = (material: WeighedMaterial, parts: readonly WeighedPart[]): readonly RangedPart[] =>
+	parts
+		.map((part) => ({ material, part, width: material.typicalWeight * (part.share.high - part.share.low) }))
+		.filter(({ width }) => width > 0n);
+
+const widestFirst = (parts: readonly RangedPart[]) => [...parts].sort((a, b) => compare(b.width, a.width));
 
 /** The material whose narrower range would settle most of the selected amount. */
 export const widest = (composition: Composition, select: (part: WeighedPart) => boolean) =>
-	ranged(composition, select)[0]?.material.material ?? null;
+	widestFirst(composition.weighed.flatMap((material) => rangedParts(material, material.parts.filter(select))))[0]
+		?.material.material ?? null;
 
 /**
  * How firmly a weak pair stands, the supplier's figure at which it turns, and the material to ask about: the widest range at
  * which it turns, all else at its typical; the widest range where no single one turns it.
  */
-export function describe(
-	composition: Composition,
-	before: PlacedName,
-	after: PlacedName,
-	orderedFrom: bigint
-): WeakPair {
-	const candidates = ranged(composition, (part) => before.select(part) || after.select(part));
+export function describe(before: Stake, after: Stake, orderedFrom: bigint): WeakPair {
+	const candidates = widestFirst([...before.ranged, ...after.ranged]);
 	const turns = candidates.flatMap((candidate) => {
 		const at = turningPoint(candidate, before, after, orderedFrom);
 		return at ? [{ candidate, at }] : [];

@@ -1,6 +1,6 @@
 import { jointBounds, type Box } from '../material/bounds';
 import { weakest, type Estimate, type TypicalBasis } from '../quantity/range';
-import { least, sum, type PartShare, type Percent } from '../quantity/units';
+import { least, plus, sum, type PartShare, type Percent } from '../quantity/units';
 import type { WeighedMaterial, WeighedPart } from './types';
 
 export type Select = (part: WeighedPart) => boolean;
@@ -75,7 +75,7 @@ function jointFraction(material: WeighedMaterial, select: Select): Estimate<Part
 	const most = reach.reduce((total, each) => total + each.most, 0n);
 	const chosen = [...families.filter(({ selected }) => selected).map(({ part }) => part), ...children];
 	return {
-		low: ((lowest?.low ?? 0n) + sum(children.map(({ share }) => share.low))) as PartShare,
+		low: plus((lowest?.low ?? 0n) as PartShare, sum(children.map(({ share }) => share.low))),
 		high: high as PartShare,
 		// With room to spare the same high is reached with every open part a little below its bound.
 		highOpen: high === most ? reach.some((each) => each.open) : reach.some((each) => each.open && each.fixed),

@@ -1,15 +1,7 @@
 import { resolveMaterial } from '../material/resolve';
 import type { ResolvedMaterial } from '../material/types';
 import type { Estimate } from '../quantity/range';
-import {
-	good,
-	LINE_DECIMALS,
-	PERCENT_DECIMALS,
-	type Id,
-	type LineShare,
-	type Outcome,
-	type Percent
-} from '../quantity/units';
+import { good, LINE_DECIMALS, PERCENT_DECIMALS, share, type Id, type LineShare, type Outcome } from '../quantity/units';
 import { amountOf, extremes } from './amounts';
 import { expand, type Leaf } from './expand';
 import { corners, judgeAmounts, sharesOf, type Shares } from './lines';
@@ -152,10 +144,10 @@ function contribute(
 		weight,
 		part: part.share,
 		share: {
-			low: (weight.low * part.share.low) as Percent,
-			high: (weight.high * part.share.high) as Percent,
+			low: share(weight.low, part.share.low),
+			high: share(weight.high, part.share.high),
 			highOpen: part.share.highOpen,
-			typical: (weight.typical * part.share.typical) as Percent,
+			typical: share(weight.typical, part.share.typical),
 			basis: part.share.basis
 		},
 		rowKey: rowKey(part.of),

@@ -12,8 +12,6 @@ const PERFUME_WORDS: ReadonlyMap<string, string> = new Map([
 ]);
 const WATER_WORDS = new Set(['aqua', 'water', 'eau']);
 
-export const isPerfume = (identity: SubstanceIdentity) => PERFUME_WORDS.has(identity.key);
-
 /** The name the EU prints: glossary name, colour index number for a colourant, "(nano)" behind a nanomaterial. */
 export function euName(row: Pick<CompositionRow, 'use' | 'nano'>, identity: SubstanceIdentity): string {
 	const base = baseName(row, identity);

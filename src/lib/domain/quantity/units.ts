@@ -26,9 +26,7 @@ export const WHOLE_PART = 10_000_000_000n as PartShare;
 export const WHOLE_PERCENT = 1_000_000_000_000_000_000n as Percent;
 
 export const plus = <U extends string>(a: Scaled<U>, b: Scaled<NoInfer<U>>) => (a + b) as Scaled<U>;
-export const minus = <U extends string>(a: Scaled<U>, b: Scaled<NoInfer<U>>) => (a - b) as Scaled<U>;
 export const sum = <U extends string>(values: readonly Scaled<U>[]) => values.reduce((a, b) => a + b, 0n) as Scaled<U>;
-export const zero = <U extends string>() => 0n as Scaled<U>;
 export const compare = (a: bigint, b: bigint): number => (a < b ? -1 : a > b ? 1 : 0);
 export const least = <Q extends bigint>(a: Q, b: Q): Q => (a < b ? a : b);
 export const most = <Q extends bigint>(a: Q, b: Q): Q => (a > b ? a : b);

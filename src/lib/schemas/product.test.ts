@@ -7,7 +7,8 @@ describe('GTIN check digit (GS1 General Specifications, worked example 629104150
 		const parsed = packSchema.safeParse({ name: 'Jar', size: '50', unit: 'ml', gtin: '6291041500214' });
 		expect(parsed.error?.issues[0]?.message).toBe('gtin-check-digit:3');
 	});
-	test('none is allowed', () => expect(packSchema.safeParse({ name: 'Jar', size: '50,5', unit: 'ml', gtin: '' }).success).toBe(true));
+	test('none is allowed', () =>
+		expect(packSchema.safeParse({ name: 'Jar', size: '50,5', unit: 'ml', gtin: '' }).success).toBe(true));
 });
 
 test('an address part loses accents and punctuation', () => {

@@ -38,7 +38,9 @@ const amountPattern = /^\d{1,6}([.,]\d{1,3})?$/;
 
 /** Check digit of a GTIN (GS1 General Specifications, modulo 10 with weights 3 and 1). */
 export function gtinCheckDigit(digits: string): number {
-	const sum = [...digits].reverse().reduce((total, digit, index) => total + Number(digit) * (index % 2 === 0 ? 3 : 1), 0);
+	const sum = [...digits]
+		.reverse()
+		.reduce((total, digit, index) => total + Number(digit) * (index % 2 === 0 ? 3 : 1), 0);
 	return (10 - (sum % 10)) % 10;
 }
 

@@ -71,6 +71,8 @@ const ATTEMPTS = 3;
 export interface UploaderOptions<Result> {
 	/** What the files are for, as the server names it. */
 	readonly purpose: string;
+	/** What each file is to be filed as; without it the file is stored and filed later. */
+	readonly document?: (file: File) => object;
 	readonly fetch?: typeof fetch;
 	/** Called with the answer of `complete` for each file that is stored. */
 	readonly ondone?: (result: Result, upload: Upload<Result>) => void;
@@ -129,6 +131,16 @@ export class Uploader<Result = unknown> {
 		this.#working = false;
 	}
 
+	#completion(upload: Upload<Result>): RequestInit {
+		const { document } = this.#options;
+		if (!document) return { method: 'POST' };
+		return {
+			method: 'POST',
+			headers: { 'content-type': 'application/json' },
+			body: JSON.stringify({ document: document(upload.file) })
+		};
+	}
+
 	async #send(upload: Upload<Result>): Promise<void> {
 		upload.state = 'sending';
 		try {
@@ -139,7 +151,7 @@ export class Uploader<Result = unknown> {
 				upload.sent = part.to;
 			}
 			upload.state = 'finishing';
-			const answer = await this.#ask(upload, paths.api.uploadComplete(opened.id), { method: 'POST' });
+			const answer = await this.#ask(upload, paths.api.uploadComplete(opened.id), this.#completion(upload));
 			upload.result = (await answer.json()) as Result;
 			upload.state = 'done';
 			this.#options.ondone?.(upload.result, upload);

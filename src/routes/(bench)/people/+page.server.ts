@@ -1,18 +1,16 @@
-import { error, fail } from '@sveltejs/kit';
+import { fail } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
 import { zod4 } from 'sveltekit-superforms/adapters';
 import { listQueryOf } from '$lib/schemas/paging';
 import { clientSchema, personSchema } from '$lib/schemas/person';
-import type { Actor } from '$lib/server/access/actor';
+import { signedIn } from '$lib/server/access/signed-in';
 import { answering, orError } from '$lib/server/http/answering';
 import { addClient, addPerson, readPeople } from '$lib/server/services/people';
 import type { Actions, PageServerLoad } from './$types';
 
-const signedIn = (actor: Actor | null): Actor => actor ?? error(401, { message: 'forbidden', code: 'forbidden' });
-
 export const load: PageServerLoad = async ({ locals, url }) => {
 	const query = listQueryOf(url.searchParams);
-	const view = await orError(() => readPeople(signedIn(locals.actor), query));
+	const view = await orError(() => readPeople(signedIn(locals), query));
 	const [personForm, clientForm] = await Promise.all([
 		superValidate(zod4(personSchema)),
 		superValidate(zod4(clientSchema))
@@ -24,11 +22,11 @@ export const actions = {
 	addPerson: async ({ request, locals }) => {
 		const form = await superValidate(request, zod4(personSchema));
 		if (!form.valid) return fail(400, { form });
-		return answering(form, () => addPerson(signedIn(locals.actor), form.data));
+		return answering(form, () => addPerson(signedIn(locals), form.data));
 	},
 	addClient: async ({ request, locals }) => {
 		const form = await superValidate(request, zod4(clientSchema));
 		if (!form.valid) return fail(400, { form });
-		return answering(form, () => addClient(signedIn(locals.actor), form.data.clientName));
+		return answering(form, () => addClient(signedIn(locals), form.data.clientName));
 	}
 } satisfies Actions;

@@ -1,8 +1,9 @@
 import { common } from './common';
 import { door } from './door';
 import { errors } from './errors';
+import { materials } from './materials';
 import { people } from './people';
 import { shell } from './shell';
 
 /** Every sentence of the product by code, one file for each area. Another language satisfies `typeof en`. */
-export const en = { common, shell, door, errors, people };
+export const en = { common, shell, door, errors, materials, people };

@@ -77,9 +77,10 @@ export function problem(
 	type: string,
 	title: string,
 	errors: readonly ProblemEntry[] = [],
-	headers: Record<string, string> = {}
+	headers: Record<string, string> = {},
+	more: object = {}
 ): Response {
-	return new Response(JSON.stringify({ type: `/problems/${type}`, title, status, errors }), {
+	return new Response(JSON.stringify({ type: `/problems/${type}`, title, status, errors, ...more }), {
 		status,
 		headers: { 'content-type': 'application/problem+json', ...headers }
 	});
@@ -114,6 +115,8 @@ export async function orProblem(fn: () => Promise<Response>): Promise<Response> 
 			? (thrown.data['errors'] as ProblemEntry[])
 			: Object.entries(thrown.data).map(([path, value]) => ({ path, value, message: thrown.code }));
 		const status = thrown.code === 'wrong-credentials' ? 401 : statusOf(thrown.code);
-		return problem(status, thrown.code, TITLE[thrown.code], errors, headers);
+		// The screens look their sentence up by the code, with the values that it names.
+		const more = { code: thrown.code, data: thrown.data };
+		return problem(status, thrown.code, TITLE[thrown.code], errors, headers, more);
 	}
 }

@@ -1,6 +1,7 @@
-import { error, redirect } from '@sveltejs/kit';
+import { redirect } from '@sveltejs/kit';
 import { z } from 'zod';
 import { materialDraftSchema } from '$lib/schemas/material';
+import { versionNumberOf } from '$lib/schemas/version-number';
 import { may } from '$lib/server/access/acts';
 import { signedIn } from '$lib/server/access/signed-in';
 import { answeringPlain, orError } from '$lib/server/http/answering';
@@ -8,29 +9,22 @@ import { jsonAction } from '$lib/server/http/json-action';
 import { draftMaterial, readMaterial, releaseMaterial, saveMaterialDraft } from '$lib/server/services/materials';
 import type { Actions, PageServerLoad } from './$types';
 
-const numberSchema = z.coerce.number().int().positive().max(1_000_000);
 const revSchema = z.object({ rev: z.number().int().positive() });
-
-function versionOf(text: string): number {
-	const parsed = numberSchema.safeParse(text);
-	if (!parsed.success) error(404, { message: 'not-found', code: 'not-found' });
-	return parsed.data;
-}
 
 export const load: PageServerLoad = async ({ locals, params }) => {
 	const actor = signedIn(locals);
-	const view = await orError(() => readMaterial(actor, params.code, versionOf(params.version)));
+	const view = await orError(() => readMaterial(actor, params.code, versionNumberOf(params.version)));
 	return { ...view, mayEdit: may(actor, 'editMaterial') };
 };
 
 export const actions = {
 	save: ({ request, locals, params }) =>
 		jsonAction(request, materialDraftSchema, (draft) =>
-			saveMaterialDraft(signedIn(locals), params.code, versionOf(params.version), draft)
+			saveMaterialDraft(signedIn(locals), params.code, versionNumberOf(params.version), draft)
 		),
 	release: ({ request, locals, params }) =>
 		jsonAction(request, revSchema, ({ rev }) =>
-			releaseMaterial(signedIn(locals), params.code, versionOf(params.version), rev)
+			releaseMaterial(signedIn(locals), params.code, versionNumberOf(params.version), rev)
 		),
 	draft: async ({ locals, params }) => {
 		const answer = await answeringPlain(() => draftMaterial(signedIn(locals), params.code));

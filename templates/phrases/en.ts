@@ -103,7 +103,8 @@ export const en = {
 		},
 		noBatch: 'no batch placed on the market yet',
 		issue: (number: number) => `Issue ${number}`,
-		pages: ' pages, English',
+		// The number follows the words: it is known only after the layout and is set at the end of the line.
+		pages: 'English, pages: ',
 		sealedOn: 'Sealed on',
 		sealedBy: 'by',
 		manifest: 'SHA-256',
@@ -120,6 +121,10 @@ export const en = {
 		contentsOpen: 'Open in this trial',
 		contentsPage: 'page',
 		contentsNote: 'A sealed issue has no column “open”.',
+		opening: (headings: number) => `${headings} headings. Each says what it needs, what it holds and what is missing.`,
+		heading: 'Heading',
+		standing: 'Standing',
+		standingReady: 'ready',
 		hashShort: 'SHA-256, first 8',
 		headingsOpen: (open: number) => (open === 1 ? '1 heading open' : `${open} headings open`),
 		evidenceCount: (count: number) => `Evidence, ${count === 1 ? '1 document' : `${count} documents`}`,
@@ -181,6 +186,11 @@ export const en = {
 		copies: {
 			title: 'Label copy',
 			law: 'Art. 19',
+			copy: 'Pack and market',
+			lead: (count: number) =>
+				count === 1
+					? 'One copy; it follows on pages of its own.'
+					: `${count} copies; each follows on pages of its own.`,
 			none: 'No label copy has been written for this product.'
 		},
 		evidence: {

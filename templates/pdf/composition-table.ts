@@ -1,12 +1,13 @@
 import type { Column, Content, TableCell } from 'pdfmake/interfaces';
 import type { Phrases } from '../phrases/index';
-import { fitsRows, INK, ROWS, RULE, SMALL, SOFT, headCell, lead, note } from './paper';
+import { fitsRows, INK, ROWS, RULE, SOFT, headCell, lead, note } from './paper';
 import { letterOf } from './words';
 import type { CompositionPrint, CompositionRowPrint, SourcePrint } from './types';
 
 const SIZE = 7.8;
-const WIDTHS = [12, '*', 46, 58, 34, 57, 24];
-const SOURCES_WIDTH = 112;
+const WIDTHS = [12, '*', 46, 57, 34, 56, 27];
+const SOURCES_WIDTH = 114;
+const SOURCE_SIZE = 7.2;
 /** The narrowest columns hold about ten characters a line. */
 const NARROW_LIMIT = 300;
 
@@ -96,7 +97,7 @@ const sumRow = (word: string, sum: string): TableCell[] => [
 function sourcesMargin(sources: readonly SourcePrint[], t: Phrases): Column {
 	return {
 		width: SOURCES_WIDTH,
-		fontSize: SMALL,
+		fontSize: SOURCE_SIZE,
 		table: {
 			widths: [12, '*'],
 			headerRows: 1,
@@ -105,7 +106,7 @@ function sourcesMargin(sources: readonly SourcePrint[], t: Phrases): Column {
 				[{ text: t.file.sources, bold: true, colSpan: 2 }, ''],
 				...sources.map((source, index): TableCell[] => [
 					{ text: letterOf(index), bold: true },
-					{ stack: [{ text: source.name }, { text: source.detail, color: SOFT, fontSize: SMALL - 0.6 }] }
+					{ stack: [{ text: source.name }, { text: source.detail, color: SOFT, fontSize: SOURCE_SIZE - 0.5 }] }
 				])
 			]
 		},

@@ -121,7 +121,7 @@ export function contentsPage(data: ProductFileData, chapters: readonly Chapter[]
 					dontBreakRows: true,
 					body: [head, ...entries.map((entry) => entryRow(entry, trial))]
 				},
-				layout: layoutOf(entries)
+				layout: layoutOf(entries, head.length - 1)
 			},
 			...(trial ? [note(t.file.contentsNote)] : [])
 		]
@@ -132,11 +132,15 @@ function entryRow(entry: Entry, trial: boolean): TableCell[] {
 	const top = entry.level === 1;
 	const color = top ? INK : SOFT;
 	const fontSize = top ? 9.07 : 8.5;
-	const law = entry.code ? { font: 'Mono', fontSize: 7.2 } : { fontSize };
+	const law = entry.code
+		? { font: 'Mono', fontSize: 7.2, margin: [0, 1, 0, 0] as [number, number, number, number] }
+		: { fontSize };
 	return [
 		{ text: entry.number, alignment: 'right', color, fontSize },
 		{
 			text: entry.title,
+			// A heading's title may run into the column of the law, which is empty beside it.
+			...(entry.law === '' ? { colSpan: 2 } : {}),
 			bold: top,
 			color,
 			fontSize,
@@ -150,14 +154,14 @@ function entryRow(entry: Entry, trial: boolean): TableCell[] {
 }
 
 /** A rule above each numbered section and none between its headings. */
-function layoutOf(entries: readonly Entry[]) {
+function layoutOf(entries: readonly Entry[], last: number) {
 	const isTop = (row: number) => entries[row - 1]?.level === 1;
 	return {
 		hLineWidth: (index: number) => (index === 1 ? 0.75 : isTop(index) ? 0.5 : 0),
 		vLineWidth: () => 0,
 		hLineColor: (index: number) => (index === 1 ? INK : RULE),
 		paddingLeft: (index: number) => (index === 0 ? 0 : 4.5),
-		paddingRight: (index: number) => (index === 0 ? 2 : 4.5),
+		paddingRight: (index: number) => (index === 0 ? 2 : index === last ? 0 : 4.5),
 		paddingTop: (row: number) => (isTop(row) ? 4.4 : 1.6),
 		paddingBottom: (row: number) => (row === 0 ? 3 : isTop(row) ? 4.4 : 1.6)
 	};

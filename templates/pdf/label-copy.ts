@@ -69,7 +69,7 @@ export function copySection(copy: LabelCopyData, tools: PrintTools, place: CopyP
 			openBlock(copy, t),
 			standing(copy, t),
 			decisions(copy, t),
-			...t.copy.cautions.map((caution, index) => note(caution, [0, index === 0 ? 12 : 2, 0, 0]))
+			cautions(t)
 		]
 	};
 }
@@ -160,6 +160,11 @@ function ingredientBlock(list: IngredientListPrint, t: Phrases): Content {
 	};
 }
 
+const cautions = (t: Phrases): Content => ({
+	stack: t.copy.cautions.map((caution, index) => note(caution, [0, index === 0 ? 10 : 1.5, 0, 0])),
+	unbreakable: true
+});
+
 function openBlock(copy: LabelCopyData, t: Phrases): Content {
 	const blocks: Content[] = [];
 	if (copy.outOfDate !== null) {
@@ -186,7 +191,7 @@ function standing(copy: LabelCopyData, t: Phrases): Content {
 	];
 	if (copy.inUseFrom !== null) rows.push([facts.inUse, cell(t.copy.batch(copy.inUseFrom))]);
 	const weight = 700 + weightOf(copy.clientName, copy.rules, copy.compiledBy);
-	return titledBlock(t.copy.standing, factsTable(rows, LABEL_WIDTH), weight, TABLE);
+	return titledBlock(t.copy.standing, factsTable(rows, LABEL_WIDTH, 2.2), weight, TABLE);
 }
 
 function decisions(copy: LabelCopyData, t: Phrases): Content {
@@ -203,5 +208,5 @@ function decisions(copy: LabelCopyData, t: Phrases): Content {
 		}
 	]);
 	const weight = linesOf(copy.approvals.map((entry) => `${entry.name}${entry.comment ?? ''}`));
-	return titledBlock(t.copy.approvals, factsTable(rows, LABEL_WIDTH), weight, TABLE);
+	return titledBlock(t.copy.approvals, factsTable(rows, LABEL_WIDTH, 2.2), weight, TABLE);
 }

@@ -46,7 +46,7 @@ export function runningHead(left: string, right: Content, edges: Edges): Content
 			{
 				columns: [
 					{ text: left, width: '*' },
-					{ text: right, width: 'auto', alignment: 'right' }
+					{ text: right, width: 'auto', alignment: 'right', noWrap: true }
 				],
 				columnGap: 18
 			},
@@ -66,7 +66,7 @@ export function pageFoot(left: Content, page: string, edges: Edges): Content {
 			{
 				columns: [
 					{ text: left, width: '*' },
-					{ text: page, width: 'auto', color: INK, alignment: 'right' }
+					{ text: page, width: 'auto', color: INK, alignment: 'right', noWrap: true }
 				],
 				columnGap: 18,
 				margin: [0, 5, 0, 0]
@@ -92,7 +92,7 @@ export const ROWS: CustomTableLayout = {
 };
 
 /** The same with more air, where each row is read as a sentence. */
-export const AIRY_ROWS: CustomTableLayout = { ...ROWS, paddingTop: () => 4.6, paddingBottom: () => 4.6 };
+export const AIRY_ROWS: CustomTableLayout = { ...ROWS, paddingTop: () => 3.5, paddingBottom: () => 3.5 };
 
 export const cell = (text: Content, more: object = {}): Content => ({ text, ...more }) as Content;
 
@@ -105,7 +105,7 @@ export const headCell = (text: string, alignment: 'left' | 'right' = 'left'): Co
 });
 
 /** Label and value, one under the other, divided by rules; an ink line above the first. */
-export function factsTable(rows: readonly (readonly [string, Content])[], labelWidth: number): Content {
+export function factsTable(rows: readonly (readonly [string, Content])[], labelWidth: number, air = 4.6): Content {
 	return {
 		table: {
 			widths: [labelWidth, '*'],
@@ -117,8 +117,8 @@ export function factsTable(rows: readonly (readonly [string, Content])[], labelW
 			hLineColor: (index) => (index === 0 ? INK : RULE),
 			paddingLeft: () => 0,
 			paddingRight: () => 6,
-			paddingTop: () => 4.6,
-			paddingBottom: () => 4.6
+			paddingTop: () => air,
+			paddingBottom: () => air
 		}
 	};
 }

@@ -33,7 +33,7 @@ export const titleContent = (title: Title): Content => ({
 const crumb = (left: string, law: string): Content => ({
 	columns: [
 		{ text: left, width: '*' },
-		{ text: law, width: 'auto', alignment: 'right' }
+		{ text: law, width: 'auto', alignment: 'right', noWrap: true }
 	],
 	fontSize: 8.2,
 	color: SOFT,
@@ -60,7 +60,7 @@ export function chapterContent(chapter: Chapter, data: ProductFileData, t: Phras
 				};
 				return {
 					stack: [sectionContent(heading, title, parent, data, t)],
-					...(index === 0
+					...(index === 0 && chapter.part === 'a'
 						? { pageBreak: 'before' as const }
 						: { margin: [0, 30, 0, 0] as [number, number, number, number] })
 				};

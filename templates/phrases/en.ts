@@ -17,7 +17,7 @@ export const en = {
 		edition: (number: number) => `copy ${number}`,
 		noEdition: 'no number yet',
 		lead: (language: string, formula: string, names: number, madeOn: string) =>
-			`${language}, approved as a whole. ${formula}. List of ${names === 1 ? 'one name' : `${names} names`}. Made on ${madeOn}.`,
+			`${language}. ${formula}. List of ${names === 1 ? 'one name' : `${names} names`}. Made on ${madeOn}.`,
 		language: 'English',
 		element: 'Element',
 		requiredBy: 'Required by',

@@ -61,6 +61,20 @@ export const documentDetailsSchema = z
 	});
 export type DocumentDetails = z.infer<typeof documentDetailsSchema>;
 
+export const attachSchema = z.object({
+	kind: z.enum(SUBJECT_KINDS),
+	address: z.string().trim().min(1).max(80)
+});
+
+/** What the list of documents may be narrowed to; anything else shows all. */
+export const documentFilterSchema = z.object({
+	kind: z.enum(DOCUMENT_KINDS).or(z.literal('')).catch(''),
+	show: z.enum(['all', 'expiring']).catch('all')
+});
+
+/** The page that a figure stands on, as a link carries it. */
+export const pageQuerySchema = z.coerce.number().int().min(1).max(100_000).nullable().catch(null);
+
 export const fileAddressSchema = z.object({ id: z.uuid() });
 
 /** Shown in the browser only when asked for; anything else downloads. */

@@ -50,7 +50,10 @@ export const paths = {
 
 	evidence: (query?: Query) => withQuery('/evidence', query),
 	evidenceItem: (id: string, query?: Query) => withQuery(`/evidence/${part(id)}`, query),
-	evidencePage: (id: string, page: number) => `/evidence/${part(id)}#page=${page}`,
+	evidencePage: (id: string, page: number) => withQuery(`/evidence/${part(id)}`, { page }),
+	/** The file itself; a browser that shows it opens it at the page. */
+	evidenceFile: (id: string, query?: { as?: 'inline' | 'attachment' }, page?: number | null) =>
+		withQuery(`/evidence/${part(id)}/file`, query) + (page ? `#page=${page}` : ''),
 
 	rules: (query?: Query) => withQuery('/rules', query),
 	act: (act: string) => `/rules/${part(act)}`,

@@ -151,15 +151,23 @@ export async function documentById(trx: Trx, id: string): Promise<DocumentRow> {
 	return withBytes(row);
 }
 
+export interface DocumentFilter extends ListQuery {
+	readonly kind?: string;
+	/** Only what expires on or before this day. */
+	readonly expiresBy?: string | null;
+}
+
 const SORTS = { title: 'document.title', kind: 'document.kind', expires: 'document.expires' } as const;
 const isSort = (name: string): name is keyof typeof SORTS => Object.hasOwn(SORTS, name);
 
-/** A page of documents whose title or file name holds what is looked for. */
-export async function listDocuments(trx: Trx, query: ListQuery): Promise<Page<DocumentRow>> {
+/** A page of documents whose title or file name holds what is looked for, of one kind or all. */
+export async function listDocuments(trx: Trx, query: DocumentFilter): Promise<Page<DocumentRow>> {
 	const pattern = `%${query.q.replace(/[\\%_]/g, '\\$&')}%`;
-	const found = documentRows(trx).where((is) =>
-		is.or([is('document.title', 'ilike', pattern), is('document.file_name', 'ilike', pattern)])
-	);
+	const { kind, expiresBy } = query;
+	const found = documentRows(trx)
+		.where((is) => is.or([is('document.title', 'ilike', pattern), is('document.file_name', 'ilike', pattern)]))
+		.$if(!!kind, (rows) => rows.where('document.kind', '=', kind ?? ''))
+		.$if(!!expiresBy, (rows) => rows.where('document.expires', '<=', expiresBy ?? null));
 	const rows = await found
 		.orderBy(isSort(query.sort) ? SORTS[query.sort] : 'document.title', query.dir)
 		.orderBy('document.id')

@@ -11,7 +11,7 @@ export interface PdfDetails {
 	readonly subject: string;
 	readonly language?: string;
 	readonly fontFolder?: string;
-	/** From 0 to 1 while pages are written; the layout before it is one step that cannot be watched. */
+	/** Share of the pages written so far, 0 to 1. The layout before it is one step that cannot be watched. */
 	readonly onWritten?: (share: number) => void;
 }
 
@@ -23,9 +23,8 @@ export interface PdfDetails {
 export async function renderPdf(definition: TDocumentDefinitions, details: PdfDetails): Promise<Uint8Array> {
 	const shelf = openShelf(details.fontFolder);
 	pdfmake.setProgressCallback(details.onWritten ?? (() => undefined));
-	const document = dress(definition, shelf);
 	const pdf = pdfmake.createPdf({
-		...document,
+		...dress(definition, shelf),
 		version: '1.7',
 		language: details.language ?? 'en-GB',
 		displayTitle: true,

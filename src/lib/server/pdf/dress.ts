@@ -10,6 +10,9 @@ const isFamily = (value: unknown): value is Family => FAMILIES.some((family) => 
 /** The keys under which a definition holds further content; everything else is passed through untouched. */
 const HOLDERS = ['stack', 'columns', 'ul', 'ol', 'section'] as const;
 
+/** Content that is made anew for every page. */
+const MAKERS = ['header', 'footer', 'background'] as const;
+
 function dressText(text: unknown, base: Family, shelf: FontShelf): unknown {
 	if (typeof text === 'string') {
 		const runs = splitRuns(text, base, shelf);
@@ -30,7 +33,7 @@ function dressNode(value: unknown, inherited: Family, shelf: FontShelf): unknown
 	const dressed: Record<string, unknown> = { ...value };
 	if ('text' in value) dressed.text = dressText(value.text, base, shelf);
 	for (const key of HOLDERS) if (key in value) dressed[key] = dressNode(value[key], base, shelf);
-	for (const key of ['header', 'footer', 'background']) {
+	for (const key of MAKERS) {
 		const maker = value[key];
 		if (typeof maker === 'function') dressed[key] = (...given: unknown[]) => dressNode(maker(...given), base, shelf);
 	}

@@ -5,11 +5,22 @@ export type PdfRequest =
 	| { readonly kind: 'label-copy'; readonly data: LabelCopyData; readonly creationDate: string }
 	| { readonly kind: 'product-file'; readonly data: ProductFileData; readonly creationDate: string };
 
-/** One line of JSON on the child's standard error. */
+/** One line of JSON on the child's standard error. `percent` counts the writing of pages, after the layout. */
 export type PdfProgress =
-	| { readonly step: 'started' }
 	| { readonly step: 'layout' }
-	| { readonly step: 'pages'; readonly done: number; readonly of: number }
-	| { readonly step: 'failed'; readonly code: string; readonly message: string };
+	| { readonly step: 'writing'; readonly percent: number }
+	| { readonly step: 'failed'; readonly code: PdfFailureCode; readonly message: string };
 
-export type PdfFailure = 'cancelled' | 'timedOut' | 'outOfMemory' | 'notStarted' | 'badRequest' | 'failed';
+export type PdfFailureCode =
+	/** The caller's signal. */
+	| 'cancelled'
+	/** Longer than the time allowed; killed. */
+	| 'timedOut'
+	/** More memory than allowed. */
+	| 'outOfMemory'
+	/** The child could not be started at all. */
+	| 'notStarted'
+	/** The child could not read the request. */
+	| 'badRequest'
+	/** Anything else; the message says what. */
+	| 'failed';

@@ -1,5 +1,5 @@
 import type { DocumentDetails, DocumentSubject, SubjectKind } from '$lib/schemas/document';
-import type { ListQuery, Page } from '$lib/schemas/paging';
+import type { Page } from '$lib/schemas/paging';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
@@ -8,20 +8,34 @@ import {
 	documentsOf,
 	insertDocument,
 	insertLink,
+	keepFile,
 	linksOf,
 	listDocuments,
 	lockLink,
 	requireSubject,
 	withdrawLink,
+	type DocumentFilter,
 	type DocumentRow,
 	type FileFacts,
 	type LinkRow
 } from '../db/documents';
+import {
+	citationsOf,
+	editionsOf,
+	namedLinksOf,
+	subjectAt,
+	type Citation,
+	type Edition,
+	type NamedLink
+} from '../db/document-uses';
 import { uploadById } from '../db/uploads';
 import { withActor, type Trx } from '../db/with-actor';
 import { Refused } from '../refused';
+import { sha256 as hashOf } from '../hash';
 import { bucket } from '../storage/bucket';
 import type { Disposition } from '../storage/disposition';
+import { inspectPdf, pdfInMemory } from '../storage/inspect-pdf';
+import { contentKey } from '../storage/keys';
 import { kindOfMediaType, nameFits, nameForKind } from '../storage/kinds';
 
 /** Long enough to be followed at once, too short to be passed on. */
@@ -117,7 +131,7 @@ export async function detachDocument(actor: Actor, linkId: string, reason: strin
 	});
 }
 
-export function searchDocuments(actor: Actor, query: ListQuery): Promise<Page<DocumentView>> {
+export function searchDocuments(actor: Actor, query: DocumentFilter): Promise<Page<DocumentView>> {
 	return withActor(actor, async (trx) => {
 		const page = await listDocuments(trx, query);
 		return { ...page, rows: page.rows.map(view) };
@@ -134,6 +148,65 @@ export function readDocument(
 	}));
 }
 
+export interface DocumentPage {
+	readonly document: DocumentView;
+	readonly links: readonly NamedLink[];
+	readonly citations: readonly Citation[];
+	readonly editions: readonly Edition[];
+}
+
+/** A document with everything that rests on it. @throws Refused 'not-found'. */
+export function readDocumentPage(actor: Actor, id: string): Promise<DocumentPage> {
+	requireAct(actor, 'readLaboratory');
+	return withActor(actor, async (trx) => ({
+		document: view(await documentById(trx, id)),
+		links: await namedLinksOf(trx, id),
+		citations: await citationsOf(trx, id),
+		editions: await editionsOf(trx, id)
+	}));
+}
+
+/** Attaches a document to what a person names by code or slug. @throws Refused 'not-found' with what was named. */
+export function attachByAddress(actor: Actor, documentId: string, kind: SubjectKind, address: string): Promise<string> {
+	requireAct(actor, 'attachDocument');
+	return withActor(actor, async (trx) => {
+		await documentById(trx, documentId);
+		const subject = await subjectAt(trx, kind, address);
+		const present = (await namedLinksOf(trx, documentId)).find(
+			(link) => link.kind === kind && link.address === address
+		);
+		if (present) throw new Refused('exists', { field: 'address', value: address });
+		return attach(trx, actor, documentId, subject);
+	});
+}
+
+export interface MadeFile {
+	readonly bytes: Uint8Array;
+	readonly mediaType: string;
+	readonly fileName: string;
+}
+
+/**
+ * Keeps content that the program itself made under its hash, and answers what `fileDocument` needs to file it.
+ * The object is there before the row: a row without content is never seen.
+ */
+export async function storeBytes(
+	trx: Trx,
+	actor: Actor,
+	{ bytes, mediaType, fileName }: MadeFile
+): Promise<{ readonly sha256: string; readonly fileName: string }> {
+	if (bytes.length === 0) throw new Refused('file-empty', { name: fileName });
+	const sha256 = hashOf(bytes);
+	const place = contentKey(sha256);
+	if ((await bucket().head(place))?.bytes !== bytes.length) await bucket().put(place, bytes, mediaType);
+	const pdf =
+		kindOfMediaType(mediaType) === 'pdf'
+			? await inspectPdf(pdfInMemory(bytes))
+			: { pages: null, encrypted: false, broken: false };
+	await keepFile(trx, { sha256, bytes: bytes.length, mediaType, ...pdf }, actor.personId);
+	return { sha256, fileName };
+}
+
 export function attachedDocuments(actor: Actor, kind: SubjectKind, id: string) {
 	return withActor(actor, async (trx) => (await documentsOf(trx, kind, id)).map(view));
 }
@@ -145,3 +218,10 @@ export async function downloadAddress(actor: Actor, id: string, disposition: Dis
 	const { mediaType, sha256 } = document;
 	return bucket().signedDownload(sha256, { fileName: trueName, mediaType, disposition, seconds: DOWNLOAD_SECONDS });
 }
+
+/** Enough time to ask a supplier for the next edition. */
+const EXPIRING_DAYS = 90;
+const DAY_MS = 24 * 60 * 60 * 1000;
+
+/** The day up to which a document counts as running out soon. */
+export const expiringBy = (): string => new Date(Date.now() + EXPIRING_DAYS * DAY_MS).toISOString().slice(0, 10);

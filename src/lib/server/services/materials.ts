@@ -324,6 +324,7 @@ const hashedRow = (row: ConstituentRow, _index: number, rows: readonly Constitue
 	high: row.high,
 	highOpen: row.high_open,
 	cas: row.cas,
+	ec: row.ec,
 	document: row.source_document_id,
 	page: row.source_page
 });

@@ -1,10 +1,11 @@
 import { common } from './common';
 import { door } from './door';
 import { errors } from './errors';
+import { evidence } from './evidence';
 import { formulas } from './formulas';
 import { materials } from './materials';
 import { people } from './people';
 import { shell } from './shell';
 
 /** Every sentence of the product by code, one file for each area. Another language satisfies `typeof en`. */
-export const en = { common, shell, door, errors, formulas, materials, people };
+export const en = { common, shell, door, errors, evidence, formulas, materials, people };

@@ -97,6 +97,7 @@ export const materials = {
 		hairDye: 'hair dye'
 	},
 	unknown: 'not in the glossary',
+	nanoName: (inci: string) => `${inci} (nano)`,
 	derived: 'derived',
 	normalised: 'normalised',
 	noDocument: 'no document',

@@ -1,0 +1,28 @@
+import { closePool } from '$lib/server/db/pool';
+import { requireMigrated } from '$lib/server/db/migrated';
+import { registerSweep } from '$lib/server/jobs/sweep';
+import { startQueue, stopQueue } from '$lib/server/jobs/queue';
+import { closeBucket } from '$lib/server/storage/bucket';
+
+/** The second entry of the application: the queue's jobs, away from every request. */
+async function start(): Promise<void> {
+	await requireMigrated();
+	const queue = await startQueue({ supervises: true });
+	await registerSweep(queue);
+	console.log(JSON.stringify({ worker: 'ready' }));
+}
+
+async function stop(): Promise<void> {
+	await stopQueue();
+	closeBucket();
+	await closePool();
+	process.exit(0);
+}
+
+process.once('SIGTERM', () => void stop());
+process.once('SIGINT', () => void stop());
+
+start().catch((error: unknown) => {
+	console.error(error);
+	process.exit(1);
+});

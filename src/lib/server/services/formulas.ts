@@ -1,7 +1,9 @@
 import { compose } from '$lib/domain/composition/compose';
 import type { CompositionFault } from '$lib/domain/composition/types';
+import type { AllergenEntry } from '$lib/domain/ingredients/types';
 import { formatExact } from '$lib/domain/quantity/decimal';
 import { LINE_DECIMALS, type Id, type IsoDate } from '$lib/domain/quantity/units';
+import { EU_ALLERGENS } from '$lib/reference';
 import { readShare, type FormulaDraft, type NewFormula } from '$lib/schemas/formula';
 import type { LineView, MaterialView } from '$lib/schemas/grid-view';
 import type { ListQuery, Page } from '$lib/schemas/paging';
@@ -70,6 +72,8 @@ export interface FormulaView {
 	readonly materials: readonly MaterialView[];
 	readonly products: Awaited<ReturnType<typeof productsOfFormula>>;
 	readonly batchDay: IsoDate;
+	/** For the list that the grid computes in the browser. */
+	readonly allergens: readonly AllergenEntry[];
 }
 
 export function readFormula(actor: Actor, code: string, number: number | null): Promise<FormulaView> {
@@ -93,7 +97,8 @@ export function readFormula(actor: Actor, code: string, number: number | null): 
 			before,
 			materials: await materialViews(trx, codes),
 			products: await productsOfFormula(trx, formula.id),
-			batchDay: today()
+			batchDay: today(),
+			allergens: EU_ALLERGENS
 		};
 	});
 }

@@ -3,7 +3,7 @@ import type { Composition, FormulaLine } from '$lib/domain/composition/types';
 import { ingredientList } from '$lib/domain/ingredients/list';
 import type { AllergenEntry, IngredientList, Stay, SubstanceIdentity } from '$lib/domain/ingredients/types';
 import type { Constituent, MaterialVersion } from '$lib/domain/material/types';
-import { decimalOf, formatExact } from '$lib/domain/quantity/decimal';
+import { decimalOf, formatExact, parseDecimal } from '$lib/domain/quantity/decimal';
 import {
 	LINE_DECIMALS,
 	PART_DECIMALS,
@@ -63,6 +63,12 @@ export function balanceOf(lines: readonly LineView[]): Balance {
 	const hasQs = lines.some((line) => line.qs);
 	const qs = hasQs ? WHOLE_LINE - stated : null;
 	return { stated, qs, total: stated + (qs ?? 0n), readable: weights.every((weight) => weight !== null) };
+}
+
+/** A batch size in 10⁻³ g; null when it cannot be read. */
+export function readBatch(text: string): bigint | null {
+	const parsed = parseDecimal(text, { decimals: 3 });
+	return parsed.ok ? parsed.value : null;
 }
 
 export const percentText = (value: bigint) => formatExact(value, LINE_DECIMALS);

@@ -1,6 +1,5 @@
 import { redirect } from '@sveltejs/kit';
 import { z } from 'zod';
-import { EU_ALLERGENS } from '$lib/reference';
 import { formulaDraftSchema } from '$lib/schemas/formula';
 import { versionNumberOf } from '$lib/schemas/version-number';
 import { may } from '$lib/server/access/acts';
@@ -15,7 +14,7 @@ const revSchema = z.object({ rev: z.number().int().positive() });
 export const load: PageServerLoad = async ({ locals, params }) => {
 	const actor = signedIn(locals);
 	const view = await orError(() => readFormula(actor, params.code, versionNumberOf(params.version)));
-	return { ...view, allergens: EU_ALLERGENS, mayEdit: may(actor, 'editFormula') };
+	return { ...view, mayEdit: may(actor, 'editFormula') };
 };
 
 export const actions = {

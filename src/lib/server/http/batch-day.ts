@@ -1,0 +1,6 @@
+import { isoDate } from '$lib/domain/quantity/day';
+import type { IsoDate } from '$lib/domain/quantity/units';
+import { today } from '../clock';
+
+/** The batch day of an address (?batch=YYYY-MM-DD); today when there is none or no such day. */
+export const batchDayOf = (url: URL): IsoDate => isoDate(url.searchParams.get('batch') ?? '') ?? today();

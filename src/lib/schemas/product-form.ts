@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import { packSchema, productSchema, type ProductInput } from './product';
 
 /** The product with its first pack in one flat form, so that it can be sent without script. */

@@ -8,7 +8,10 @@ const preferenceSchema = z.object({
 	theme: z.enum(['light', 'dark', 'system']).optional(),
 	decimalSign: z.enum(['.', ',']).optional(),
 	singleKeys: z.enum(['on', 'off']).optional(),
-	back: z.string().regex(/^\/(?!\/)/).default('/')
+	back: z
+		.string()
+		.regex(/^\/(?!\/)/)
+		.default('/')
 });
 
 const ONE_YEAR_S = 365 * 24 * 60 * 60;

@@ -29,7 +29,11 @@ export const actions = {
 		} catch (thrown) {
 			if (!(thrown instanceof Refused)) throw thrown;
 			form.data.password = '';
-			return message(form, { kind: 'refused', code: thrown.code, data: thrown.data }, { status: statusOf(thrown.code) });
+			return message(
+				form,
+				{ kind: 'refused', code: thrown.code, data: thrown.data },
+				{ status: statusOf(thrown.code) }
+			);
 		}
 		cookies.set(cookie.name, cookie.value, cookie.attributes);
 		const session = await validateSession(cookie.value);

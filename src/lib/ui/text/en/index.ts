@@ -1,4 +1,5 @@
 import { common } from './common';
+import { counter } from './counter';
 import { door } from './door';
 import { errors } from './errors';
 import { evidence } from './evidence';
@@ -6,6 +7,7 @@ import { formulas } from './formulas';
 import { materials } from './materials';
 import { people } from './people';
 import { composition, list, productFormula, products } from './products';
+import { auditTrail, desk, rules } from './rules';
 import { shell } from './shell';
 
 /** Every sentence of the product by code, one file for each area. Another language satisfies `typeof en`. */
@@ -14,6 +16,7 @@ export const en = {
 	shell,
 	door,
 	errors,
+	counter,
 	evidence,
 	formulas,
 	materials,
@@ -21,5 +24,8 @@ export const en = {
 	products,
 	list,
 	composition,
-	productFormula
+	productFormula,
+	auditTrail,
+	desk,
+	rules
 };

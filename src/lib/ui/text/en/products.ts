@@ -123,6 +123,7 @@ export const composition = {
 		ofWhich: 'of which'
 	} as Readonly<Record<string, string>>,
 	fault: (kind: string, material: string | null) => (material === null ? kind : `${material}: ${kind}`),
+	nano: (name: string) => `${name} (nano)`,
 	marginText: 'As added: what was weighed, before anything is lost or reacts.'
 };
 

@@ -1,0 +1,76 @@
+export const rules = {
+	title: 'Rule book',
+	sentence: (count: number, name: string) => `${count} articles and entries, state ${name}.`,
+	find: 'Article, name or words',
+	caption: 'Articles and entries',
+	head: { citation: 'Entry', title: 'Subject', standing: 'Standing' },
+	nothingFound: 'No entry matches. Clear the search to see all.',
+	standing: {
+		confirmed: 'confirmed against its source',
+		fromMemory: 'from memory; check the official text',
+		commonPractice: 'common practice, no source'
+	},
+	source: 'Source',
+	from: 'Applies to batches placed from',
+	until: 'until',
+	ownWords: 'In our own words. The official text prevails.',
+	marginText:
+		'Short texts in our own words, each with its source and standing. The official text prevails, and local law with it.'
+};
+
+export const auditTrail = {
+	title: 'Audit row',
+	caption: 'What was recorded',
+	sentence: 'Written in the transaction of the change it records; nobody can edit it.',
+	who: 'Who',
+	when: 'When',
+	what: 'What',
+	subject: 'Subject',
+	reason: 'Reason',
+	before: 'Before',
+	after: 'After',
+	hash: 'Hash of this row',
+	previousHash: 'Hash of the row before',
+	previous: 'Row before',
+	next: 'Row after',
+	none: 'none',
+	system: 'the system',
+	actions: {
+		'version-released': 'a version was released',
+		'draft-saved': 'a draft was saved',
+		'draft-opened': 'a draft was opened',
+		'material-created': 'a material was made',
+		'formula-created': 'a formula was made',
+		'product-created': 'a product was made',
+		'inputs-moved': 'a release reached this product',
+		'person-added': 'a person was added',
+		'client-added': 'a client was added',
+		'signed-in': 'signed in',
+		'signed-out': 'signed out',
+		'token-issued': 'a token was issued',
+		'preferences-changed': 'own settings were changed'
+	} as Readonly<Record<string, string>>,
+	marginText:
+		'Each row carries the hash of the row before it, so that a change or a gap shows when the chain is verified.'
+};
+
+export const desk = {
+	title: 'Desk',
+	sentence: (count: number) =>
+		count === 0 ? 'Nothing waits for you.' : `${count} ${count === 1 ? 'thing waits' : 'things wait'} for you.`,
+	caption: 'What waits for you',
+	head: { what: 'What', why: 'Why', since: 'since' },
+	materialDraft: (name: string, number: number) => `${name}, draft ${number}`,
+	formulaDraft: (name: string, number: number) => `${name}, draft ${number}`,
+	waits: 'a draft to finish or release',
+	empty: 'Drafts that you may finish and copies that wait for you stand here, each with a link to the place of work.',
+	products: 'Products',
+	productsCaption: 'Products and what they refer to',
+	noProducts: 'No product yet.',
+	marginTitle: 'Begin here',
+	steps: [
+		'Add the materials with their composition and documents, and release them.',
+		'Write the formula from them until it balances at 100, and release it.',
+		'Make a product for a client; its list stands there at once, with every reason.'
+	]
+};

@@ -1,0 +1,6 @@
+import { signedIn } from '$lib/server/access/signed-in';
+import { orError } from '$lib/server/http/answering';
+import { readCounter } from '$lib/server/services/counter';
+import type { PageServerLoad } from './$types';
+
+export const load: PageServerLoad = ({ locals }) => orError(() => readCounter(signedIn(locals)));

@@ -8,7 +8,15 @@ import { houseRules } from './scripts/lint/house-rules.js';
 
 export default ts.config(
 	{
-		ignores: ['node_modules/', '.svelte-kit/', 'build/', 'build-worker/', '.data/', 'test-results/', 'playwright-report/']
+		ignores: [
+			'node_modules/',
+			'.svelte-kit/',
+			'build/',
+			'build-worker/',
+			'.data/',
+			'test-results/',
+			'playwright-report/'
+		]
 	},
 	js.configs.recommended,
 	...ts.configs.recommended,

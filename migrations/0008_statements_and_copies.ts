@@ -44,8 +44,12 @@ export async function up(db: Kysely<unknown>): Promise<void> {
 			foreign key (client_id, product_id) references product (client_id, id)
 		)`.execute(db);
 	await sql`
-		create index statement_rests_projection on statement_rests (product_id, projection_kind, projection_subject)`.execute(db);
-	await sql`create table counter (scope text primary key, next integer not null default 1 check (next > 0))`.execute(db);
+		create index statement_rests_projection on statement_rests (product_id, projection_kind, projection_subject)`.execute(
+		db
+	);
+	await sql`create table counter (scope text primary key, next integer not null default 1 check (next > 0))`.execute(
+		db
+	);
 	await sql`
 		create table label_copy (
 			id uuid primary key,

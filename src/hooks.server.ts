@@ -19,7 +19,9 @@ export const handle = sequence(requestId, securityHeaders, languageAndTheme, ses
 export const handleError: HandleServerError = ({ error, event, status }) => {
 	if (status === 404) return { message: 'not-found', code: 'not-found' };
 	const errorId = randomUUID();
-	console.error(JSON.stringify({ errorId, requestId: event.locals.requestId, route: event.route.id, error: describe(error) }));
+	console.error(
+		JSON.stringify({ errorId, requestId: event.locals.requestId, route: event.route.id, error: describe(error) })
+	);
 	return { message: 'broken', errorId };
 };
 

@@ -87,11 +87,18 @@ export interface CounterIssue {
 export interface CounterProductView {
 	readonly slug: string;
 	readonly name: string;
-	readonly brandName: string;
-	readonly packs: readonly { readonly name: string; readonly size: string; readonly unit: string }[];
+	readonly functionText: string;
+	readonly packs: readonly {
+		readonly id: string;
+		readonly name: string;
+		readonly size: string;
+		readonly unit: string;
+	}[];
+	/** Waits for this client's approval and still stands. */
 	readonly needs: readonly CounterCopy[];
-	/** Approved by this client but no longer true, or being checked: nothing to do but wait. */
-	readonly waiting: readonly CounterCopy[];
+	/** Was waiting for approval when its reasons moved: the laboratory acts next. */
+	readonly corrected: readonly CounterCopy[];
+	/** The newest approved copy of each pack and market, and the one in use beside it. */
 	readonly approved: readonly CounterCopy[];
 	readonly sentBack: readonly CounterCopy[];
 	readonly issues: readonly CounterIssue[];

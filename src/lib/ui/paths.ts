@@ -34,6 +34,8 @@ export const paths = {
 	claims: (slug: string, query?: Query) => withQuery(`${product(slug)}/claims`, query),
 	claim: (slug: string, claimId: string) => withQuery(`${product(slug)}/claims`, { claim: claimId }),
 	label: (slug: string, query?: Query) => withQuery(`${product(slug)}/label`, query),
+	labelDownload: (slug: string, copyId: string, as: 'pdf' | 'txt' | 'json') =>
+		withQuery(`${product(slug)}/label/${part(copyId)}/download`, { as }),
 	productFile: (slug: string, query?: Query) => withQuery(`${product(slug)}/file`, query),
 
 	materials: (query?: Query) => withQuery('/materials', query),
@@ -62,6 +64,9 @@ export const paths = {
 
 	counter: () => '/counter',
 	counterProduct: (slug: string, query?: Query) => withQuery(`/counter/${part(slug)}`, query),
+	counterCopy: (slug: string, copyId: string, as: 'pdf' | 'txt' | 'json') =>
+		withQuery(`/counter/${part(slug)}/copies/${part(copyId)}`, { as }),
+	counterIssue: (slug: string, number: number) => `/counter/${part(slug)}/issues/${part(number)}`,
 
 	api: {
 		uploads: () => '/api/uploads',

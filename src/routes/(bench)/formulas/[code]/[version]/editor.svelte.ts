@@ -15,7 +15,7 @@ export class Editor {
 	saved = $state<Saved>('clean');
 	restored = $state(false);
 	rev: number;
-	#base: readonly LineView[];
+	#base = $state.raw<readonly LineView[]>([]);
 	#history: EditedLine[][] = [];
 	readonly #key: string;
 

@@ -3,13 +3,19 @@ import type { ConstituentRowInput } from '../../src/lib/schemas/material';
 import type { Actor } from '../../src/lib/server/access/actor';
 import { newId } from '../../src/lib/server/db/id';
 import { createFormula, releaseFormula, saveFormulaDraft } from '../../src/lib/server/services/formulas';
-import { createMaterial, releaseMaterial, saveMaterialDraft } from '../../src/lib/server/services/materials';
+import {
+	createMaterial,
+	readMaterial,
+	releaseMaterial,
+	saveMaterialDraft
+} from '../../src/lib/server/services/materials';
+import { fileStatement } from './documents';
 import { DEMO_FORMULAS } from './formulas';
 import { DEMO_MATERIALS, type DemoMaterial } from './materials';
 
 const FIRST_REV = 1;
 
-function rowsOf({ parts }: DemoMaterial): ConstituentRowInput[] {
+function rowsOf({ parts }: DemoMaterial, documentId: string): ConstituentRowInput[] {
 	return parts.map((part) => ({
 		inci: part.inci,
 		cas: part.cas ?? '',
@@ -23,8 +29,8 @@ function rowsOf({ parts }: DemoMaterial): ConstituentRowInput[] {
 			: null,
 		use: part.use ?? 'other',
 		nano: part.nano ?? false,
-		documentId: null,
-		page: null
+		documentId,
+		page: 1
 	}));
 }
 
@@ -32,7 +38,10 @@ export async function seedMaterials(formulator: Actor): Promise<void> {
 	for (const material of DEMO_MATERIALS) {
 		const { code, tradeName, supplier } = material;
 		await createMaterial(formulator, { code, tradeName, supplier });
-		const rev = await saveMaterialDraft(formulator, code, 1, { rev: FIRST_REV, rows: rowsOf(material) });
+		const { material: made } = await readMaterial(formulator, code, 1);
+		const documentId = await fileStatement(formulator, material, made.id);
+		const rows = rowsOf(material, documentId);
+		const rev = await saveMaterialDraft(formulator, code, 1, { rev: FIRST_REV, rows });
 		await releaseMaterial(formulator, code, 1, rev);
 	}
 }

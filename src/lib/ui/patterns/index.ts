@@ -37,3 +37,4 @@ export type { PhaseShare } from './BalanceBar.svelte';
 export type { SpineEntry } from './Spine.svelte';
 export type { StripSection } from './PageStrip.svelte';
 export type { SumRow } from './Sums.svelte';
+export { padding } from './align';

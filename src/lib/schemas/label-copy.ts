@@ -45,6 +45,28 @@ export const copyDraftSchema = z
 	});
 export type CopyDraft = z.infer<typeof copyDraftSchema>;
 
+/** The form of a content, for the page that edits it. */
+export const draftOf = (rev: number, content: LabelContent): CopyDraft => {
+	const { durability } = content;
+	return {
+		rev,
+		brand: content.brand,
+		name: content.name,
+		function: content.function,
+		eMark: content.content.eMark,
+		directions: content.directions,
+		precautions: content.precautions,
+		durability: durability?.kind ?? 'open',
+		months: durability && 'months' in durability ? String(durability.months) : '',
+		reason: durability?.kind === 'notNeeded' ? durability.reason : '',
+		batch: content.batch,
+		responsibleName: content.responsible.name,
+		responsibleAddress: content.responsible.address,
+		imported: content.imported,
+		origin: content.origin
+	};
+};
+
 /** A content as it stands in the database. */
 export const labelContentSchema: z.ZodType<LabelContent> = z.object({
 	form: z.literal(1),

@@ -54,25 +54,3 @@ export const editedContent = (before: LabelContent, draft: CopyDraft): LabelCont
 	imported: draft.imported,
 	origin: draft.imported ? draft.origin : ''
 });
-
-/** The form of a content, for the page that edits it. */
-export const draftForm = ({ rev, content }: { readonly rev: number; readonly content: LabelContent }): CopyDraft => {
-	const { durability } = content;
-	return {
-		rev,
-		brand: content.brand,
-		name: content.name,
-		function: content.function,
-		eMark: content.content.eMark,
-		directions: content.directions,
-		precautions: content.precautions,
-		durability: durability?.kind ?? 'open',
-		months: durability && 'months' in durability ? String(durability.months) : '',
-		reason: durability?.kind === 'notNeeded' ? durability.reason : '',
-		batch: content.batch,
-		responsibleName: content.responsible.name,
-		responsibleAddress: content.responsible.address,
-		imported: content.imported,
-		origin: content.origin
-	};
-};

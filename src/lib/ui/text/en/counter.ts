@@ -43,8 +43,7 @@ export const counter = {
 	issuesHead: { issue: 'Issue', date: 'Date', hash: 'SHA-256', file: 'File' },
 	issueHeld: 'kept by the laboratory',
 	issueDownload: (number: number) => `Download issue ${number}`,
-	changes: (lines: number, number: number) =>
-		`${lines === 1 ? 'One line' : `${lines} lines`} since copy ${number}.`,
+	changes: (lines: number, number: number) => `${lines === 1 ? 'One line' : `${lines} lines`} since copy ${number}.`,
 	noChanges: (number: number) => `The words are those of copy ${number}.`,
 	firstCopy: 'This is the first copy of this pack.',
 	effect: {

@@ -4,6 +4,7 @@ import { door } from './door';
 import { errors } from './errors';
 import { evidence } from './evidence';
 import { formulas } from './formulas';
+import { label } from './label';
 import { materials } from './materials';
 import { people } from './people';
 import { composition, list, productFormula, products } from './products';
@@ -19,6 +20,7 @@ export const en = {
 	counter,
 	evidence,
 	formulas,
+	label,
 	materials,
 	people,
 	products,

@@ -57,7 +57,8 @@ function fault(of: Fault): string {
 	}
 }
 
-const stateWord = (state: unknown) => (typeof state === 'string' && state in states ? states[state as CopyStateName] : '');
+const stateWord = (state: unknown) =>
+	typeof state === 'string' && state in states ? states[state as CopyStateName] : '';
 
 /** What a refused step says here; null where the general sentence does. */
 function refused(code: string, data: Readonly<Record<string, unknown>>): string | null {
@@ -70,7 +71,8 @@ function refused(code: string, data: Readonly<Record<string, unknown>>): string 
 		return 'Something cannot be told yet; write down why the copy may pass all the same.';
 	if (code === 'invalid' && data['field'] === 'lastBatch')
 		return 'Another copy is in use; name the last batch that carries it.';
-	if (code === 'conflict' && 'contentHash' in data) return 'The text has changed since you opened this page. Read it again.';
+	if (code === 'conflict' && 'contentHash' in data)
+		return 'The text has changed since you opened this page. Read it again.';
 	return null;
 }
 

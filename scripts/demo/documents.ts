@@ -14,6 +14,7 @@ const figure = ({ min, typical, max }: DemoPart): string => {
 };
 
 const statement = ({ tradeName, code, supplier, parts }: DemoMaterial): TDocumentDefinitions => ({
+	defaultStyle: { font: 'Noto', fontSize: 10 },
 	content: [
 		{ text: 'Composition statement', fontSize: 18 },
 		{ text: `${tradeName}, ${code}`, margin: [0, 6, 0, 2] },

@@ -47,8 +47,8 @@ test('one name is walked by keyboard to the gram, the material and the rule', as
 
 test('a client sees own products and nothing of another client or the laboratory', async ({ page, app }) => {
 	await signIn(page, app.account('client'));
-	await expect(page).toHaveURL('/counter');
-	await page.getByRole('main').getByRole('link', { name: 'Nightfold Cream' }).click();
+	// The client of one product has nothing to choose and stands before it at once.
+	await expect(page).toHaveURL('/counter/nightfold-cream');
 	await expect(page.getByRole('heading', { level: 1 })).toHaveText('Nightfold Cream');
 	for (const address of [
 		'/counter/tidewell-shampoo',

@@ -19,11 +19,10 @@ export interface PlainHead {
 /** The copy as plain text, one element a paragraph. A mark stands first and last, so that no part taken from it loses it. */
 export function plainCopy(content: LabelContent, words: LabelWords, head: PlainHead): string {
 	const marked = head.mark === null ? [] : [`*** ${head.mark} ***`];
-	const elements = copyElements(content, words).flatMap(({ element, text }) =>
-		text === null
-			? []
-			: [`${words.elements[element]}:\n${element === 'ingredients' ? printedList(content, words) : text}`]
-	);
+	const elements = copyElements(content, words).flatMap(({ element, text }) => {
+		if (text === null) return [];
+		return [element === 'ingredients' ? printedList(content, words) : `${words.elements[element]}:\n${text}`];
+	});
 	return `${[...marked, head.lines.join('\n'), ...elements, ...marked].join('\n\n')}\n`;
 }
 

@@ -191,7 +191,9 @@ function printData(around: Around): LabelCopyData {
 	};
 }
 
-const citationOf = (ruleId: string | null) => (ruleId === null ? '' : (ruleById(ruleId)?.citation ?? ''));
+/** The article alone: the act stands once, under the rules applied. */
+const citationOf = (ruleId: string | null) =>
+	(ruleId === null ? '' : (ruleById(ruleId)?.citation ?? '')).split(', ').at(-1) ?? '';
 
 /** A name ends at a comma and a space; a comma inside a name has none behind it. */
 function namesOf(content: LabelContent, faults: readonly CopyFault[]): IngredientPrint[] {

@@ -7,6 +7,7 @@ import { addClient, addPerson } from '../src/lib/server/services/people';
 import { createProduct } from '../src/lib/server/services/products';
 import { closeBucket } from '../src/lib/server/storage/bucket';
 import { firstAdministrator, type Account } from './demo/bootstrap';
+import { seedCopies } from './demo/copies';
 import { seedFormulas, seedMaterials } from './demo/laboratory';
 import { DEMO_CLIENTS, DEMO_PASSWORD, DEMO_PEOPLE } from './demo/people';
 import { DEMO_PRODUCTS } from './demo/products';
@@ -25,7 +26,9 @@ async function seedDemo(): Promise<readonly Account[]> {
 		const clientId = person.client ? (clients.get(person.client) ?? '') : '';
 		const id = await addPerson(admin, { name, email, roles: [...roles], clientId, password: DEMO_PASSWORD });
 		const actor = await loadActor(id);
-		if (actor) for (const role of roles) actors.set(role, actor);
+		if (!actor) continue;
+		actors.set(person.client ?? name, actor);
+		for (const role of roles) actors.set(role, actor);
 	}
 	const formulator = actors.get('formulator');
 	const officer = actors.get('officer');
@@ -35,6 +38,9 @@ async function seedDemo(): Promise<readonly Account[]> {
 	for (const { client, ...product } of DEMO_PRODUCTS) {
 		await createProduct(officer, { ...product, clientId: clients.get(client) ?? '' });
 	}
+	const [pell, quay] = [actors.get('Pell & Fennick'), actors.get('Harrow Quay')];
+	if (!pell || !quay) throw new Error('the demo needs the people of two clients');
+	await seedCopies({ officer, pell, quay });
 	return DEMO_PEOPLE.map(({ name, email, roles, client }) => ({
 		name,
 		email,

@@ -68,6 +68,8 @@ const PAGES = [
 	'/products/nightfold-cream/list',
 	'/products/nightfold-cream/composition',
 	'/products/nightfold-cream/formula',
+	'/products/nightfold-cream/label',
+	'/products/tidewell-shampoo/label',
 	'/materials',
 	'/materials/new',
 	'/materials/BW-GA20/1',

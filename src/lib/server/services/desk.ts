@@ -1,7 +1,9 @@
+import { sql } from 'kysely';
 import type { ProductRow } from '../db/products';
 import { listProducts } from '../db/products';
 import { requireAct, may } from '../access/acts';
 import type { Actor } from '../access/actor';
+import type { CopyState } from '../db/schema';
 import { withActor, type Trx } from '../db/with-actor';
 
 export interface Waiting {
@@ -11,7 +13,16 @@ export interface Waiting {
 	readonly number: number;
 	readonly since: string;
 }
+/** A label copy that waits for a step of this person's, or that a change made untrue. */
+export interface WaitingCopy {
+	readonly slug: string;
+	readonly product: string;
+	readonly number: number | null;
+	readonly why: 'inReview' | 'approvedByClient' | 'outOfDate' | 'draft';
+	readonly since: string;
+}
 export interface DeskView {
+	readonly copies: readonly WaitingCopy[];
 	readonly waiting: readonly Waiting[];
 	readonly products: readonly ProductRow[];
 	readonly allProducts: number;
@@ -28,7 +39,8 @@ export function readDesk(actor: Actor): Promise<DeskView> {
 			...(may(actor, 'editFormula') ? await formulaDrafts(trx) : [])
 		];
 		const { rows, total } = await listProducts(trx, { q: '', page: 1, sort: 'name', dir: 'asc' });
-		return { waiting, products: rows, allProducts: total };
+		const copies = may(actor, 'editCopy') ? await waitingCopies(trx) : [];
+		return { waiting, copies, products: rows, allProducts: total };
 	});
 }
 
@@ -67,5 +79,33 @@ async function formulaDrafts(trx: Trx): Promise<Waiting[]> {
 		name: row.name,
 		number: row.number,
 		since: day(row.created_at)
+	}));
+}
+
+async function waitingCopies(trx: Trx): Promise<WaitingCopy[]> {
+	const { rows } = await sql<{
+		slug: string;
+		product: string;
+		number: number | null;
+		state: CopyState;
+		at: Date;
+		moved: boolean;
+	}>`
+		select p.slug, p.name as product, c.number, c.state, c.created_at as at,
+			coalesce(r.hash <> j.hash, false) as moved
+		from label_copy c
+		join product p on p.id = c.product_id
+		left join statement_rests r on r.statement_id = c.list_statement_id
+		left join projection j on j.product_id = c.product_id
+			and j.kind = r.projection_kind and j.subject = r.projection_subject
+		where c.state in ('draft', 'inReview', 'approvedByClient')
+			or (c.state in ('approvedByLaboratory', 'inUse') and r.hash <> j.hash)
+		order by moved desc, c.created_at limit ${MOST_WAITING}`.execute(trx);
+	return rows.map(({ slug, product, number, state, at, moved }) => ({
+		slug,
+		product,
+		number,
+		why: moved || (state !== 'draft' && state !== 'inReview' && state !== 'approvedByClient') ? 'outOfDate' : state,
+		since: day(at)
 	}));
 }

@@ -63,6 +63,14 @@ export const desk = {
 	materialDraft: (name: string, number: number) => `${name}, draft ${number}`,
 	formulaDraft: (name: string, number: number) => `${name}, draft ${number}`,
 	waits: 'a draft to finish or release',
+	copy: (product: string, number: number | null) =>
+		number === null ? `${product}, label copy` : `${product}, label copy ${number}`,
+	copyWaits: {
+		draft: 'a draft to finish and submit',
+		inReview: 'waits for the laboratory’s approval',
+		approvedByClient: 'waits for its first batch',
+		outOfDate: 'out of date: the list prints other names now'
+	},
 	empty: 'Drafts that you may finish and copies that wait for you stand here, each with a link to the place of work.',
 	products: 'Products',
 	productsCaption: 'Products and what they refer to',

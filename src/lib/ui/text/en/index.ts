@@ -1,3 +1,4 @@
+import { claims } from './claims';
 import { common } from './common';
 import { counter } from './counter';
 import { door } from './door';
@@ -17,6 +18,7 @@ export const en = {
 	shell,
 	door,
 	errors,
+	claims,
 	counter,
 	evidence,
 	formulas,

@@ -1,5 +1,6 @@
 import { closePool } from '$lib/server/db/pool';
 import { requireMigrated } from '$lib/server/db/migrated';
+import { registerBuildProductFile } from '$lib/server/jobs/build-product-file';
 import { registerSweep } from '$lib/server/jobs/sweep';
 import { startQueue, stopQueue } from '$lib/server/jobs/queue';
 import { closeBucket } from '$lib/server/storage/bucket';
@@ -8,6 +9,7 @@ import { closeBucket } from '$lib/server/storage/bucket';
 async function start(): Promise<void> {
 	await requireMigrated();
 	const queue = await startQueue({ supervises: true });
+	await registerBuildProductFile(queue);
 	await registerSweep(queue);
 	console.log(JSON.stringify({ worker: 'ready' }));
 }

@@ -90,7 +90,8 @@ function fileNameOf({ product, row, madeAt }: Printed, form: DownloadForm): stri
 	return cleanFileName(`${parts.map((part) => part.replace(/[_/\\]+/g, '-').replace(/\s+/g, '-')).join('_')}.${form}`);
 }
 
-async function printedCopy(trx: Trx, actor: Actor, slug: string, copyId: string): Promise<Printed> {
+/** What is printed of a copy; also the product file binds it. */
+export async function printedCopy(trx: Trx, actor: Actor, slug: string, copyId: string): Promise<Printed> {
 	const product = await productBySlug(trx, slug);
 	const row = await copyById(trx, product.id, copyId);
 	const forClient = actor.side === 'client';

@@ -1,7 +1,8 @@
 import { join } from 'node:path';
 import { sql } from 'kysely';
-import { countReady, type SectionReading } from '$lib/domain/file/readiness';
+import { countReady, type NeedReading, type SectionReading } from '$lib/domain/file/readiness';
 import type { ProductFileData } from '../../../../templates/pdf/types';
+import { phrasesIn } from '../../../../templates/phrases/index';
 import { may, requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
@@ -19,6 +20,7 @@ import { bucket } from '../storage/bucket';
 import { storeBytes } from './documents';
 import { fileData } from './file-print';
 import { readinessOf } from './file-readiness';
+import { ITEM, openWordsOf, whyOf } from './file-words';
 
 /** A file of some hundred pages is laid out within these. */
 const BUILD_MS = 120_000;
@@ -34,9 +36,24 @@ export interface BuiltFile {
 	readonly pages: number | null;
 	readonly shared: boolean;
 }
+export interface NeedView {
+	readonly key: string;
+	readonly item: string;
+	readonly words: string;
+	readonly state: NeedReading['state'];
+	readonly supply: NeedReading['need']['source'];
+}
+export interface SectionView {
+	readonly section: SectionReading['section'];
+	readonly readiness: SectionReading['readiness'];
+	readonly title: string;
+	readonly law: string;
+	readonly open: string;
+	readonly needs: readonly NeedView[];
+}
 export interface FilePage {
 	readonly product: ProductRow;
-	readonly sections: readonly SectionReading[];
+	readonly sections: readonly SectionView[];
 	readonly count: { readonly ready: number; readonly all: number };
 	readonly evidence: readonly BoundDocument[];
 	readonly decisions: readonly NeedDecisionRow[];
@@ -56,7 +73,7 @@ export function readFilePage(actor: Actor, slug: string): Promise<FilePage> {
 		const ids = [...new Set(sections.flatMap(({ needs }) => needs.flatMap(({ documents }) => documents)))];
 		return {
 			product,
-			sections,
+			sections: sections.map(sectionView),
 			count: countReady(sections),
 			evidence: await boundDocuments(trx, ids),
 			decisions: await needDecisions(trx, product.id),
@@ -68,6 +85,21 @@ export function readFilePage(actor: Actor, slug: string): Promise<FilePage> {
 		};
 	});
 }
+
+const sectionView = (section: SectionReading): SectionView => ({
+	section: section.section,
+	readiness: section.readiness,
+	title: phrasesIn('en').sections[section.section].title,
+	law: phrasesIn('en').sections[section.section].law,
+	open: openWordsOf(section),
+	needs: section.needs.map((reading) => ({
+		key: reading.need.key,
+		item: ITEM[reading.need.key] ?? reading.need.key,
+		words: whyOf(reading),
+		state: reading.state,
+		supply: reading.need.source
+	}))
+});
 
 const filesOf = (trx: Trx, productId: string): Promise<BuiltFile[]> =>
 	trx

@@ -4,6 +4,7 @@ import { counter } from './counter';
 import { door } from './door';
 import { errors } from './errors';
 import { evidence } from './evidence';
+import { file } from './file';
 import { formulas } from './formulas';
 import { label } from './label';
 import { materials } from './materials';
@@ -21,6 +22,7 @@ export const en = {
 	claims,
 	counter,
 	evidence,
+	file,
 	formulas,
 	label,
 	materials,

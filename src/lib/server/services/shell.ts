@@ -1,5 +1,10 @@
+import { countReady, type Readiness } from '$lib/domain/file/readiness';
+import { orderIsCertain } from '$lib/domain/ingredients/list';
 import type { Actor } from '../access/actor';
+import { copyStanding } from '../db/file-facts';
+import { productBySlug } from '../db/products';
 import { withActor, type Trx } from '../db/with-actor';
+import { readinessOf } from './file-readiness';
 
 type Counted = 'product' | 'material' | 'formula' | 'document';
 
@@ -19,3 +24,31 @@ export const workspaceCounts = (actor: Actor) =>
 		formulas: await countOf(trx, 'formula'),
 		evidence: await countOf(trx, 'document')
 	}));
+
+/** Readiness of a product's parts, for the spine: a state, and figures where they say more than its word. */
+export interface PartReadiness {
+	readonly state: Readiness;
+	readonly figures?: { readonly ready: number; readonly all: number };
+}
+export type ProductParts = Readonly<Record<'formula' | 'list' | 'label' | 'file', PartReadiness>>;
+
+const LABEL: Readonly<Record<Awaited<ReturnType<typeof copyStanding>>, Readiness>> = {
+	none: 'notBegun',
+	unapproved: 'incomplete',
+	outOfDate: 'outOfDate',
+	approved: 'ready'
+};
+
+export const readProductParts = (actor: Actor, slug: string): Promise<ProductParts> =>
+	withActor(actor, async (trx) => {
+		const product = await productBySlug(trx, slug);
+		const { sections, reading } = await readinessOf(trx, product);
+		const count = countReady(sections);
+		const certain = reading.kind === 'reading' && orderIsCertain(reading.list);
+		return {
+			formula: { state: reading.kind === 'nothingReleased' ? 'incomplete' : 'ready' },
+			list: { state: reading.kind === 'nothingReleased' ? 'notBegun' : certain ? 'ready' : 'incomplete' },
+			label: { state: LABEL[await copyStanding(trx, product.id)] },
+			file: { state: count.ready === count.all ? 'ready' : 'incomplete', figures: count }
+		};
+	});

@@ -6,6 +6,7 @@ import { closePool } from '../src/lib/server/db/pool';
 import { addClient, addPerson } from '../src/lib/server/services/people';
 import { createProduct } from '../src/lib/server/services/products';
 import { closeBucket } from '../src/lib/server/storage/bucket';
+import { seedEvidence } from './demo/evidence';
 import { firstAdministrator, type Account } from './demo/bootstrap';
 import { seedCopies } from './demo/copies';
 import { seedFormulas, seedMaterials } from './demo/laboratory';
@@ -41,6 +42,7 @@ async function seedDemo(): Promise<readonly Account[]> {
 	const [pell, quay] = [actors.get('Pell & Fennick'), actors.get('Harrow Quay')];
 	if (!pell || !quay) throw new Error('the demo needs the people of two clients');
 	await seedCopies({ officer, pell, quay });
+	await seedEvidence(officer, formulator);
 	return DEMO_PEOPLE.map(({ name, email, roles, client }) => ({
 		name,
 		email,

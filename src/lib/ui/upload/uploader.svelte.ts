@@ -147,7 +147,14 @@ export class Uploader<Result = unknown> {
 			const opened = await this.#open(upload);
 			for (const part of partsOf(upload.bytes, opened.partBytes)) {
 				const body = upload.file.slice(part.from, part.to);
-				await this.#ask(upload, paths.api.uploadPart(opened.id, part.number), { method: 'PUT', body }, ATTEMPTS);
+				// Without a type of its own a slice would reach the server as no body at all.
+				const headers = { 'content-type': 'application/octet-stream' };
+				await this.#ask(
+					upload,
+					paths.api.uploadPart(opened.id, part.number),
+					{ method: 'PUT', headers, body },
+					ATTEMPTS
+				);
 				upload.sent = part.to;
 			}
 			upload.state = 'finishing';

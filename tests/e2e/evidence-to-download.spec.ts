@@ -40,6 +40,7 @@ test('the client approves the copy that waits and downloads it without a mark', 
 	await expect(page).toHaveURL('/counter/tidewell-shampoo');
 	await expectAccessible(page);
 	await page.getByRole('button', { name: 'Approve copy 2' }).click();
+	await expect(page.getByRole('button', { name: 'Approve copy 2' })).toHaveCount(0);
 	await expect(page.getByText('Approved by Jonas Quay').first()).toBeVisible();
 	const [download] = await Promise.all([
 		page.waitForEvent('download'),

@@ -1,5 +1,5 @@
 import type { Actor } from '../../src/lib/server/access/actor';
-import { CRITERIA } from '../../src/lib/schemas/claim';
+import type { CRITERIA } from '../../src/lib/schemas/claim';
 import type { DocumentKind } from '../../src/lib/schemas/document';
 import { withActor } from '../../src/lib/server/db/with-actor';
 import { addClaim, answerClaim, linkEvidence } from '../../src/lib/server/services/claims';

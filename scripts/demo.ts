@@ -4,6 +4,7 @@ import { loadActor } from '../src/lib/server/auth/load-actor';
 import type { Actor } from '../src/lib/server/access/actor';
 import { closePool } from '../src/lib/server/db/pool';
 import { addClient, addPerson } from '../src/lib/server/services/people';
+import { assignAssessor } from '../src/lib/server/services/product-details';
 import { createProduct } from '../src/lib/server/services/products';
 import { closeBucket } from '../src/lib/server/storage/bucket';
 import { seedEvidence } from './demo/evidence';
@@ -33,11 +34,13 @@ async function seedDemo(): Promise<readonly Account[]> {
 	}
 	const formulator = actors.get('formulator');
 	const officer = actors.get('officer');
-	if (!formulator || !officer) throw new Error('the demo needs a formulator and an officer');
+	const assessor = actors.get('assessor');
+	if (!formulator || !officer || !assessor) throw new Error('the demo needs a formulator, an officer and an assessor');
 	await seedMaterials(formulator);
 	await seedFormulas(formulator);
-	for (const { client, ...product } of DEMO_PRODUCTS) {
-		await createProduct(officer, { ...product, clientId: clients.get(client) ?? '' });
+	for (const { client, assessed, ...product } of DEMO_PRODUCTS) {
+		const slug = await createProduct(officer, { ...product, clientId: clients.get(client) ?? '' });
+		if (assessed) await assignAssessor(officer, slug, assessor.personId);
 	}
 	const [pell, quay] = [actors.get('Pell & Fennick'), actors.get('Harrow Quay')];
 	if (!pell || !quay) throw new Error('the demo needs the people of two clients');

@@ -2,6 +2,8 @@ import type { ProductInput } from '../../src/lib/schemas/product';
 
 export interface DemoProduct extends Omit<ProductInput, 'clientId'> {
 	readonly client: string;
+	/** Whether the safety assessor of the demo is assigned to it. */
+	readonly assessed: boolean;
 }
 
 const adult = { ages: ['adult' as const], spray: 'none' as const, originCountry: '' };
@@ -18,6 +20,7 @@ export const DEMO_PRODUCTS: readonly DemoProduct[] = [
 		...adult,
 		formulaCode: 'F-0012',
 		clientCode: 'PF-NC-07',
+		assessed: true,
 		responsibleName: 'Pell & Fennick Ltd',
 		responsibleAddress: '7 Example Quay, Dublin, Ireland',
 		pack: { name: 'Carton with jar', size: '50', unit: 'ml', gtin: '' }
@@ -33,6 +36,7 @@ export const DEMO_PRODUCTS: readonly DemoProduct[] = [
 		...adult,
 		formulaCode: 'F-0020',
 		clientCode: 'HQ-11',
+		assessed: true,
 		responsibleName: 'Harrow Quay GmbH',
 		responsibleAddress: 'Musterkai 3, Hamburg, Germany',
 		pack: { name: 'Tube', size: '200', unit: 'ml', gtin: '' }
@@ -49,6 +53,7 @@ export const DEMO_PRODUCTS: readonly DemoProduct[] = [
 		ages: ['children-3-to-12'],
 		formulaCode: 'F-0031',
 		clientCode: 'MN-02',
+		assessed: false,
 		responsibleName: 'Marlpit Nursery SARL',
 		responsibleAddress: '12 rue Exemple, Lille, France',
 		pack: { name: 'Bottle with pump', size: '250', unit: 'ml', gtin: '' }

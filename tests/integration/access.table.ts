@@ -47,6 +47,49 @@ export const ACCESS: readonly AccessRow[] = [
 	},
 	{ route: '/(bench)/rules', call: 'GET', address: '/rules', answers: STAFF },
 	{ route: '/(bench)/rules/[act]/[entry]', call: 'GET', address: '/rules/eu-1223-2009/art-33', answers: STAFF },
+	{
+		route: '/(bench)/products/[slug]/details',
+		call: 'GET',
+		address: '/products/pebblewick-kids-wash/details',
+		answers: PRODUCT
+	},
+	{
+		route: '/(bench)/products/[slug]/details',
+		call: '?/save',
+		address: `${P}/details`,
+		body: {
+			rev: '1',
+			name: 'A',
+			brandName: 'A',
+			functionText: 'A',
+			clientCode: '',
+			responsibleName: 'A',
+			responsibleAddress: 'A',
+			originCountry: ''
+		},
+		answers: OFFICER_CHANGES
+	},
+	{
+		route: '/(bench)/products/[slug]/details',
+		call: '?/addPack',
+		address: `${P}/details`,
+		body: { name: 'A', size: '50', unit: 'ml', gtin: '' },
+		answers: OFFICER_CHANGES
+	},
+	{
+		route: '/(bench)/products/[slug]/details',
+		call: '?/assign',
+		address: `${P}/details`,
+		body: { personId: NO_ID },
+		answers: OFFICER_CHANGES
+	},
+	{
+		route: '/(bench)/products/[slug]/details',
+		call: '?/withdraw',
+		address: `${P}/details`,
+		body: { personId: NO_ID },
+		answers: OFFICER_CHANGES
+	},
 	{ route: '/(bench)/people', call: 'GET', address: '/people', answers: [403, 403, 403, 200, 404, 303] },
 	{
 		route: '/(bench)/people',
@@ -220,44 +263,49 @@ export const ACCESS: readonly AccessRow[] = [
 	{
 		route: '/(bench)/products/[slug]',
 		call: 'GET',
-		address: '/products/nightfold-cream',
+		address: '/products/pebblewick-kids-wash',
 		answers: [303, 303, 404, 303, 404, 303]
 	},
 	{
 		route: '/(bench)/products/[slug]/formula',
 		call: 'GET',
-		address: '/products/nightfold-cream/formula',
+		address: '/products/pebblewick-kids-wash/formula',
 		answers: PRODUCT
 	},
 	{
 		route: '/(bench)/products/[slug]/composition',
 		call: 'GET',
-		address: '/products/nightfold-cream/composition',
+		address: '/products/pebblewick-kids-wash/composition',
 		answers: PRODUCT
 	},
-	{ route: '/(bench)/products/[slug]/list', call: 'GET', address: '/products/nightfold-cream/list', answers: PRODUCT },
+	{
+		route: '/(bench)/products/[slug]/list',
+		call: 'GET',
+		address: '/products/pebblewick-kids-wash/list',
+		answers: PRODUCT
+	},
 	{
 		route: '/(bench)/products/[slug]/list/copy.txt',
 		call: 'GET',
-		address: '/products/nightfold-cream/list/copy.txt',
+		address: '/products/pebblewick-kids-wash/list/copy.txt',
 		answers: PRODUCT
 	},
 	{
 		route: '/(bench)/products/[slug]/list/copy.json',
 		call: 'GET',
-		address: '/products/nightfold-cream/list/copy.json',
+		address: '/products/pebblewick-kids-wash/list/copy.json',
 		answers: PRODUCT
 	},
 	{
 		route: '/(bench)/products/[slug]/list/copy.csv',
 		call: 'GET',
-		address: '/products/nightfold-cream/list/copy.csv',
+		address: '/products/pebblewick-kids-wash/list/copy.csv',
 		answers: PRODUCT
 	},
 	{
 		route: '/(bench)/products/[slug]/claims',
 		call: 'GET',
-		address: '/products/nightfold-cream/claims',
+		address: '/products/pebblewick-kids-wash/claims',
 		answers: PRODUCT
 	},
 	{
@@ -298,7 +346,7 @@ export const ACCESS: readonly AccessRow[] = [
 	{
 		route: '/(bench)/products/[slug]/label',
 		call: 'GET',
-		address: '/products/nightfold-cream/label',
+		address: '/products/pebblewick-kids-wash/label',
 		answers: PRODUCT
 	},
 	{
@@ -349,7 +397,12 @@ export const ACCESS: readonly AccessRow[] = [
 		address: `/products/nightfold-cream/label/${NO_ID}/download`,
 		answers: [404, 404, 404, 404, 404, 303]
 	},
-	{ route: '/(bench)/products/[slug]/file', call: 'GET', address: '/products/nightfold-cream/file', answers: PRODUCT },
+	{
+		route: '/(bench)/products/[slug]/file',
+		call: 'GET',
+		address: '/products/pebblewick-kids-wash/file',
+		answers: PRODUCT
+	},
 	{ route: '/(bench)/products/[slug]/file', call: '?/build', address: `${P}/file`, body: {}, answers: OFFICER_CHANGES },
 	{
 		route: '/(bench)/products/[slug]/file',

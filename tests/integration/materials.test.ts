@@ -12,24 +12,14 @@ import {
 	releaseMaterial,
 	saveMaterialDraft
 } from '$lib/server/services/materials';
+import { insertPerson } from './support/people';
 
 let owner: pg.Client;
 let formulator: Actor;
 let administrator: Actor;
 let client: Actor;
 
-async function person(name: string, role: Role, clientId: string | null = null): Promise<Actor> {
-	const personId = newId();
-	const email = `${name}@laboratory.example`;
-	await owner.query('insert into person (id, email, name, password_hash) values ($1, $2, $3, $4)', [
-		personId,
-		email,
-		name,
-		'-'
-	]);
-	const side = role === 'client' ? 'client' : 'staff';
-	return { personId, name, email, roles: new Set([role]), side, clientId, decimalSign: '.', singleKeys: true };
-}
+const person = (name: string, role: Role, clientId: string | null = null) => insertPerson(owner, name, role, clientId);
 
 beforeAll(async () => {
 	owner = new pg.Client({ connectionString: process.env.DATABASE_OWNER_URL });

@@ -22,6 +22,7 @@ import { sweepUploads } from '$lib/server/services/uploads-sweep';
 import { bucket, closeBucket } from '$lib/server/storage/bucket';
 import { PART_BYTES } from '$lib/server/storage/upload-rules';
 import { startBucket, type RunningBucket } from '../../minio-fake/server';
+import { insertPerson } from './support/people';
 
 let folder = '';
 let standIn: RunningBucket;
@@ -31,18 +32,7 @@ let formulator: Actor;
 let client: Actor;
 let materialId = '';
 
-async function person(name: string, role: Role, clientId: string | null = null): Promise<Actor> {
-	const personId = newId();
-	const email = `${name}@laboratory.example`;
-	await owner.query('insert into person (id, email, name, password_hash) values ($1, $2, $3, $4)', [
-		personId,
-		email,
-		name,
-		'-'
-	]);
-	const side = role === 'client' ? 'client' : 'staff';
-	return { personId, name, email, roles: new Set([role]), side, clientId, decimalSign: '.', singleKeys: true };
-}
+const person = (name: string, role: Role, clientId: string | null = null) => insertPerson(owner, name, role, clientId);
 
 beforeAll(async () => {
 	folder = await mkdtemp(join(tmpdir(), 'uploads-'));
@@ -311,7 +301,7 @@ describe('documents', () => {
 		});
 		expect(links).toMatchObject([{ subjectKind: 'material', subjectId: materialId }]);
 		const { rows } = await owner.query('select action from audit_row where subject = $1 order by action', [documentId]);
-		expect(rows.map(({ action }) => action)).toEqual(['document.attached', 'document.filed']);
+		expect(rows.map(({ action }) => action)).toEqual(['document-attached', 'document-filed']);
 	});
 
 	test('a subject that is not there undoes the whole step', async () => {

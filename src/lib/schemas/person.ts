@@ -1,6 +1,7 @@
 import { z } from 'zod';
 
 export const STAFF_ROLE_NAMES = ['officer', 'formulator', 'assessor', 'administrator'] as const;
+export type StaffRole = (typeof STAFF_ROLE_NAMES)[number];
 const PASSWORD = { min: 12, max: 200 } as const;
 
 export const clientSchema = z.object({ clientName: z.string().trim().min(1).max(200).default('') });

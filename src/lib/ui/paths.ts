@@ -27,6 +27,7 @@ export const paths = {
 	products: (query?: Query) => withQuery('/products', query),
 	newProduct: () => '/products/new',
 	product: (slug: string, query?: Query) => withQuery(product(slug), query),
+	productDetails: (slug: string) => `${product(slug)}/details`,
 	productPart: (slug: string, name: ProductPart, query?: Query) => withQuery(`${product(slug)}/${name}`, query),
 	formulaOfProduct: (slug: string, query?: Query) => withQuery(`${product(slug)}/formula`, query),
 	composition: (slug: string, query?: Query) => withQuery(`${product(slug)}/composition`, query),
@@ -37,6 +38,7 @@ export const paths = {
 	labelDownload: (slug: string, copyId: string, as: 'pdf' | 'txt' | 'json') =>
 		withQuery(`${product(slug)}/label/${part(copyId)}/download`, { as }),
 	productFile: (slug: string, query?: Query) => withQuery(`${product(slug)}/file`, query),
+	builtFile: (slug: string, number: number) => `${product(slug)}/file/${part(number)}`,
 
 	materials: (query?: Query) => withQuery('/materials', query),
 	newMaterial: () => '/materials/new',
@@ -57,6 +59,7 @@ export const paths = {
 	evidenceFile: (id: string, query?: { as?: 'inline' | 'attachment' }, page?: number | null) =>
 		withQuery(`/evidence/${part(id)}/file`, query) + (page ? `#page=${page}` : ''),
 
+	people: (query?: Query) => withQuery('/people', query),
 	rules: (query?: Query) => withQuery('/rules', query),
 	act: (act: string) => `/rules/${part(act)}`,
 	rule: (act: string, entry: string) => `/rules/${part(act)}/${part(entry)}`,

@@ -75,7 +75,7 @@ export async function fileDocument(
 	const id = await insertDocument(trx, { ...about, ...file, personId: actor.personId });
 	await audit(trx, actor, {
 		stream: { kind: 'workspace', id: WORKSPACE_SUBJECT },
-		action: 'document.filed',
+		action: 'document-filed',
 		subject: id,
 		after: { ...about, ...file }
 	});
@@ -90,7 +90,7 @@ async function attach(trx: Trx, actor: Actor, documentId: string, subject: Docum
 	const linkId = await insertLink(trx, documentId, subject, actor.personId);
 	await audit(trx, actor, {
 		stream: { kind: subject.kind, id: subject.id },
-		action: 'document.attached',
+		action: 'document-attached',
 		subject: documentId,
 		after: { linkId, ...subject }
 	});
@@ -123,7 +123,7 @@ export async function detachDocument(actor: Actor, linkId: string, reason: strin
 		await withdrawLink(trx, linkId, new Date());
 		await audit(trx, actor, {
 			stream: { kind: link.subjectKind, id: link.subjectId },
-			action: 'document.detached',
+			action: 'document-detached',
 			subject: link.documentId,
 			before: link,
 			reason

@@ -21,7 +21,7 @@ export interface SpineProduct {
 	readonly parts: Partial<Record<ProductPart, { readonly state: Readiness; readonly word?: string }>>;
 }
 
-export type WorkspacePlace = 'desk' | 'products' | 'materials' | 'formulas' | 'evidence' | 'rules';
+export type WorkspacePlace = 'desk' | 'products' | 'materials' | 'formulas' | 'evidence' | 'rules' | 'people';
 
 /** `data.shell` of the bench's layout. */
 export interface ShellData {

@@ -9,6 +9,7 @@ import { formulas } from './formulas';
 import { label } from './label';
 import { materials } from './materials';
 import { people } from './people';
+import { productDetails } from './product-details';
 import { composition, list, productFormula, products } from './products';
 import { auditTrail, desk, rules } from './rules';
 import { shell } from './shell';
@@ -31,6 +32,7 @@ export const en = {
 	list,
 	composition,
 	productFormula,
+	productDetails,
 	auditTrail,
 	desk,
 	rules

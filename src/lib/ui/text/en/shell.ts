@@ -21,7 +21,8 @@ export const shell = {
 		materials: 'Materials',
 		formulas: 'Formulas',
 		evidence: 'Evidence',
-		rules: 'Rule book'
+		rules: 'Rule book',
+		people: 'People'
 	},
 	parts: {
 		formula: 'Formula',

@@ -48,6 +48,20 @@ export const ACCESS: readonly AccessRow[] = [
 	{ route: '/(bench)/rules', call: 'GET', address: '/rules', answers: STAFF },
 	{ route: '/(bench)/rules/[act]/[entry]', call: 'GET', address: '/rules/eu-1223-2009/art-33', answers: STAFF },
 	{
+		route: '/(bench)/products/[slug]/list',
+		call: '?/arrange',
+		address: `${P}/list`,
+		body: { payload: { market: 'EU', names: ['Aqua'] } },
+		answers: OFFICER_CHANGES
+	},
+	{
+		route: '/(bench)/products/[slug]/list',
+		call: '?/carryOver',
+		address: `${P}/list`,
+		body: { substanceId: NO_ID, materialId: NO_ID, leftOut: 'yes', reason: 'A' },
+		answers: OFFICER_CHANGES
+	},
+	{
 		route: '/(bench)/products/[slug]/details',
 		call: 'GET',
 		address: '/products/pebblewick-kids-wash/details',
@@ -493,6 +507,13 @@ export const ACCESS: readonly AccessRow[] = [
 		route: '/api/v1/compute/composition',
 		call: 'POST',
 		address: '/api/v1/compute/composition',
+		body: { json: {} },
+		answers: [401, 401, 401, 401, 401, 401]
+	},
+	{
+		route: '/api/v1/compute/batch-sheet',
+		call: 'POST',
+		address: '/api/v1/compute/batch-sheet',
 		body: { json: {} },
 		answers: [401, 401, 401, 401, 401, 401]
 	},

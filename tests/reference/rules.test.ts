@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { RULE } from '../../src/lib/domain/ingredients/list';
+import { MARKET_RULES } from '../../src/lib/domain/ingredients/market';
 import { allRules, EU_ALLERGENS, idOf, ruleById } from '../../src/lib/reference';
 import { ruleTextSchema } from '../../src/lib/schemas/reference';
 
@@ -25,7 +25,10 @@ describe('the rule reference', () => {
 		expect(allRules().every((rule) => ruleById(idOf(rule)) === rule)).toBe(true);
 	});
 	test('every rule that a list can name is there', () => {
-		const named = [...Object.values(RULE), ...EU_ALLERGENS.map(({ ruleId }) => ruleId)];
+		const named = [
+			...Object.values(MARKET_RULES).flatMap(({ orderRule, nameRule }) => [orderRule, nameRule]),
+			...EU_ALLERGENS.map(({ ruleId }) => ruleId)
+		];
 		expect(named.filter((id) => ruleById(id) === undefined)).toEqual([]);
 	});
 	test('an unknown id finds nothing', () => expect(ruleById('eu-1223-2009/art-999')).toBeUndefined());

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { Market } from '../schemas/market';
 import {
 	allergenRowSchema,
 	ruleTextSchema,
@@ -8,6 +9,9 @@ import {
 } from '../schemas/reference';
 import { ALLERGEN_ROWS } from './allergens';
 import { ARTICLES } from './articles';
+import { MARKET_ARTICLES } from './market-articles';
+
+export { NAME_BOOK } from './market-names';
 
 /** The state that this reference was written at; it is printed wherever a rule was applied. */
 export const RULE_BOOK_NAME = 'EU 2026.11';
@@ -34,6 +38,29 @@ export const EU_ALLERGENS: readonly Allergen[] = rows.map((row) => ({
 	placedFrom: row.before2023 ? null : (NEW_NAMES_FROM as Allergen['placedFrom'])
 }));
 
+/** The classic names, as Great Britain keeps them. [M] in the fact base: (EU) 2023/1545 was not adopted there. */
+const GB_ALLERGENS = EU_ALLERGENS.filter(({ placedFrom }) => placedFrom === null);
+/** Canada took the EU's table over by reference, with days of its own (Cosmetic Regulations, s. 21.4(5)). */
+const CANADA_CLASSIC_FROM = '2026-04-12' as Allergen['placedFrom'];
+const CANADA_FIRST_SOLD_FROM = '2026-08-01' as NonNullable<Allergen['placedFrom']>;
+const CANADA_EXISTING_FROM = '2028-08-01' as Allergen['placedFrom'];
+const CA_ALLERGENS: readonly Allergen[] = EU_ALLERGENS.map((entry) =>
+	entry.placedFrom === null
+		? { ...entry, placedFrom: CANADA_CLASSIC_FROM }
+		: { ...entry, placedFrom: CANADA_EXISTING_FROM, firstSoldFrom: CANADA_FIRST_SOLD_FROM }
+);
+
+/** The allergen entries that a market names; none in the United States, Australia and ASEAN. */
+export const ALLERGENS: Readonly<Record<Market, readonly Allergen[]>> = {
+	EU: EU_ALLERGENS,
+	GB: GB_ALLERGENS,
+	US: [],
+	CA: CA_ALLERGENS,
+	AU: [],
+	ASEAN: [],
+	CH: EU_ALLERGENS
+};
+
 const allergenText = (row: AllergenRow): RuleText => ({
 	act: COSMETICS_ACT,
 	entry: allergenEntry(row),
@@ -48,7 +75,9 @@ const allergenText = (row: AllergenRow): RuleText => ({
 	standing: 'confirmed'
 });
 
-const RULES: readonly RuleText[] = z.array(ruleTextSchema).parse([...ARTICLES, ...rows.map(allergenText)]);
+const RULES: readonly RuleText[] = z
+	.array(ruleTextSchema)
+	.parse([...ARTICLES, ...MARKET_ARTICLES, ...rows.map(allergenText)]);
 const BY_ID: ReadonlyMap<string, RuleText> = new Map(RULES.map((rule) => [`${rule.act}/${rule.entry}`, rule]));
 
 export const allRules = (): readonly RuleText[] => RULES;

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { parseDecimal } from '../domain/quantity/decimal';
 import { isoDate } from '../domain/quantity/day';
 import { LINE_DECIMALS, PART_DECIMALS, WHOLE_LINE, WHOLE_PART } from '../domain/quantity/units';
+import { MARKETS } from '../domain/ingredients/types';
 import { AGES, PRODUCT_TYPES, SITES, SPRAYS, STAYS } from './product';
 
 const decimalText = (decimals: number, max: bigint) =>
@@ -52,7 +53,11 @@ export const lineSchema = z
 			ctx.addIssue({ code: 'custom', path: ['percent'], message: 'percentOrQs' });
 	});
 
-const MARKETS = ['EU', 'GB', 'US', 'CA', 'AU', 'ASEAN', 'CH'] as const;
+/** A shade adds fixed amounts of materials; the formula's q.s. line gives way. */
+export const shadeLineSchema = z
+	.object({ material: key, percent: linePercent })
+	.strict()
+	.transform((line) => ({ ...line, qs: false, formula: undefined, min: undefined, max: undefined }));
 
 export const computeInputSchema = z.object({
 	materials: z.record(
@@ -61,7 +66,7 @@ export const computeInputSchema = z.object({
 	),
 	formulas: z.record(key, z.object({ lines: z.array(lineSchema).max(1000) })),
 	formula: key,
-	shades: z.record(key, z.unknown()).optional(),
+	shades: z.record(key, z.array(shadeLineSchema).min(1).max(100)).optional(),
 	use: z
 		.object({
 			type: z.enum(PRODUCT_TYPES).optional(),
@@ -80,8 +85,16 @@ export const computeInputSchema = z.object({
 	complete: z
 		.array(z.object({ material: key, question: z.string().max(60), document: z.string().max(300), date: day }))
 		.optional(),
-	arrangement: z.record(z.string(), z.array(name)).optional()
+	arrangement: z.partialRecord(z.enum(MARKETS), z.array(name).min(1).max(2000)).optional()
 });
 export type ComputeInput = z.infer<typeof computeInputSchema>;
+
+export const MASS_DECIMALS = 6;
+const mass = decimalText(MASS_DECIMALS, 10n ** 15n).refine((text) => /[1-9]/.test(text), { message: 'notPositive' });
+
+export const batchSheetInputSchema = computeInputSchema
+	.pick({ materials: true, formulas: true, formula: true })
+	.extend({ size: mass, unit: z.enum(['g', 'kg']).default('g'), step: mass });
+export type BatchSheetInput = z.infer<typeof batchSheetInputSchema>;
 
 export const tokenRequestSchema = z.object({ email: z.string().min(1).max(254), password: z.string().min(1).max(200) });

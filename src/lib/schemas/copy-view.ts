@@ -22,7 +22,7 @@ export interface ApprovalView {
 export interface EffectView {
 	readonly id: string;
 	readonly effect: 'saysSomethingElse' | 'untouched';
-	readonly causeKind: 'formula' | 'material';
+	readonly causeKind: 'formula' | 'material' | 'product';
 	readonly cause: string | null;
 	readonly oldText: string;
 	readonly newText: string;

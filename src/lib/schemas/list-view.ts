@@ -1,6 +1,11 @@
+import type { LeftOutReason, Market } from '../domain/ingredients/types';
+
 /** What the pages of a product show of its list: figures as exact decimals in %, reasons as addresses' parts. */
 export interface WeighedView {
 	readonly material: string;
+	readonly materialId: string;
+	readonly substanceId: string;
+	readonly carryOver: boolean;
 	readonly materialCode: string;
 	readonly materialNumber: number;
 	readonly formulaCode: string;
@@ -43,10 +48,20 @@ export interface EntryView {
 }
 export interface LeftOutView {
 	readonly name: string;
-	readonly reason: 'impurity' | 'processingAid' | 'allergenAtOrBelow' | 'allergenNotYet' | 'namedByPerfume';
+	readonly reason: LeftOutReason;
 	readonly typical: string;
 	readonly limit: string | null;
 }
+/** What cannot be told yet of a list. */
+export type QuestionView =
+	| {
+			readonly kind: 'threshold';
+			readonly name: string;
+			readonly low: string;
+			readonly high: string;
+			readonly limit: string;
+	  }
+	| { readonly kind: 'colourName'; readonly name: string; readonly candidates: readonly string[] };
 export interface WeakView {
 	readonly before: string;
 	readonly after: string;
@@ -59,17 +74,23 @@ export interface DecisionView {
 	readonly by: string;
 	readonly at: string;
 }
+/** A place that an arrangement was not given, or has lost. */
+export interface RefusalView {
+	readonly name: string;
+	readonly before: string;
+	readonly because: 'weight' | 'colourantLast' | 'mayContainLast';
+	readonly turns: WeakView['turns'];
+}
 export interface ListView {
+	readonly market: Market;
+	/** An officer's order is kept. */
+	readonly arranged: boolean;
+	readonly refused: readonly RefusalView[];
 	readonly entries: readonly EntryView[];
 	readonly text: string;
 	readonly weak: readonly WeakView[];
 	readonly leftOut: readonly LeftOutView[];
-	readonly questions: readonly {
-		readonly name: string;
-		readonly low: string;
-		readonly high: string;
-		readonly limit: string;
-	}[];
+	readonly questions: readonly QuestionView[];
 	readonly decision: DecisionView | null;
 }
 export interface BasisView {

@@ -37,4 +37,5 @@ export interface Allergen {
 	readonly leaveOnAbove: Percent;
 	readonly rinseOffAbove: Percent;
 	readonly placedFrom: IsoDate | null;
+	readonly firstSoldFrom?: IsoDate;
 }

@@ -1,4 +1,4 @@
-import { colourIndexIn } from '$lib/domain/ingredients/names';
+import { colourIndexIn } from '$lib/domain/ingredients/colour-names';
 import { substanceKey } from '$lib/domain/material/substance-key';
 import { KNOWN_NAMES } from '$lib/reference/names';
 

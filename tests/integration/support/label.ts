@@ -3,11 +3,12 @@ import { formulaDraftSchema } from '$lib/schemas/formula';
 import { copyDraftSchema, type CopyDraft } from '$lib/schemas/label-copy';
 import { materialDraftSchema } from '$lib/schemas/material';
 import { productSchema } from '$lib/schemas/product';
-import type { Actor, Role } from '$lib/server/access/actor';
+import type { Actor } from '$lib/server/access/actor';
 import { newId } from '$lib/server/db/id';
 import { createFormula, draftFormula, releaseFormula, saveFormulaDraft } from '$lib/server/services/formulas';
 import { createMaterial, draftMaterial, releaseMaterial, saveMaterialDraft } from '$lib/server/services/materials';
 import { createProduct } from '$lib/server/services/products';
+import { insertPerson } from './people';
 
 /** People, materials, formulas and products made by the services, so that copies stand on what a person could have made. */
 export class Workshop {
@@ -18,14 +19,14 @@ export class Workshop {
 	) {}
 
 	static async open(owner: pg.Client): Promise<Workshop> {
-		const officer = await person(owner, 'officer', 'officer', null);
-		return new Workshop(owner, officer, await person(owner, 'formulator', 'formulator', null));
+		const officer = await insertPerson(owner, 'officer', 'officer');
+		return new Workshop(owner, officer, await insertPerson(owner, 'formulator', 'formulator'));
 	}
 
 	async client(name: string): Promise<Actor> {
 		const id = newId();
 		await this.owner.query('insert into client (id, name) values ($1, $2)', [id, name]);
-		return person(this.owner, name.toLowerCase().replaceAll(' ', '-'), 'client', id);
+		return insertPerson(this.owner, name.toLowerCase().replaceAll(' ', '-'), 'client', id);
 	}
 
 	/** Releases the next version of a material; figures are percentages as typed. */
@@ -98,19 +99,6 @@ export class Workshop {
 		);
 		return id;
 	}
-}
-
-async function person(owner: pg.Client, name: string, role: Role, clientId: string | null): Promise<Actor> {
-	const personId = newId();
-	const email = `${name}@laboratory.example`;
-	await owner.query('insert into person (id, email, name, password_hash) values ($1, $2, $3, $4)', [
-		personId,
-		email,
-		name,
-		'-'
-	]);
-	const side = role === 'client' ? 'client' : 'staff';
-	return { personId, name, email, roles: new Set([role]), side, clientId, decimalSign: '.', singleKeys: true };
 }
 
 export const filledDraft = (change: Partial<CopyDraft> = {}): CopyDraft =>

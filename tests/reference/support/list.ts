@@ -1,9 +1,9 @@
 import { ingredientList } from '../../../src/lib/domain/ingredients/list';
-import type { IngredientList, Stay } from '../../../src/lib/domain/ingredients/types';
+import type { IngredientList, Market, Stay } from '../../../src/lib/domain/ingredients/types';
 import { formatExact } from '../../../src/lib/domain/quantity/decimal';
 import type { IsoDate } from '../../../src/lib/domain/quantity/units';
 import { composed, substancesOf, type Formulas, type Materials } from '../../../src/lib/domain/testing/formula';
-import { EU_ALLERGENS } from '../../../src/lib/reference';
+import { ALLERGENS, NAME_BOOK } from '../../../src/lib/reference';
 
 /** Shorthands for materials of one constituent or of several, and for a formula by its lines. */
 export const pure = (inci: string) => [{ inci, typical: '100' }];
@@ -15,14 +15,20 @@ export const formula = (...lines: [string, string][]): Formulas => ({
 export const listOf = (
 	materials: Materials,
 	formulas: Formulas,
-	{ stay = 'leave-on', day = '2026-12-01', formula = 'F' }: { stay?: Stay; day?: string; formula?: string } = {}
+	{
+		stay = 'leave-on',
+		day = '2026-12-01',
+		formula = 'F',
+		market = 'EU'
+	}: { stay?: Stay; day?: string; formula?: string; market?: Market } = {}
 ): IngredientList =>
 	ingredientList(composed(materials, formulas, formula), {
-		market: 'EU',
+		market,
 		stay,
 		batchDay: day as IsoDate,
 		substances: substancesOf(materials),
-		allergens: EU_ALLERGENS
+		allergens: ALLERGENS[market],
+		names: NAME_BOOK
 	});
 
 /** The typical share of a name in %, exact. */

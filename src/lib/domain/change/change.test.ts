@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { IsoDate } from '../quantity/units';
 import { ingredientList } from '../ingredients/list';
+import { GLOSSARY_ONLY } from '../ingredients/types';
 import { composed, substancesOf, type Materials } from '../testing/formula';
 import { canonicalText } from './canonical';
 import { listProjection } from './projection';
@@ -41,7 +42,8 @@ describe('listProjection', () => {
 			stay: 'leave-on',
 			batchDay: '2026-12-01' as IsoDate,
 			substances: substancesOf(all),
-			allergens: []
+			allergens: [],
+			names: GLOSSARY_ONLY
 		});
 	};
 	const materials = { a: [{ inci: 'Glycerin', typical: '100' }], b: [{ inci: 'Betaine', typical: '100' }] };

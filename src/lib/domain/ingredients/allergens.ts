@@ -42,11 +42,17 @@ export function readAllergens(composition: Composition, request: ListRequest): r
 				substances,
 				share,
 				limit,
-				inForce: entry.placedFrom === null || !isBefore(request.batchDay, entry.placedFrom),
+				inForce: isInForce(entry, request),
 				above: share.typical > limit
 			}
 		];
 	});
+}
+
+/** A product whose first sale nobody has told counts as new: naming one name more is lawful, one less is not. */
+function isInForce({ placedFrom, firstSoldFrom }: AllergenEntry, { batchDay, firstSold }: ListRequest): boolean {
+	if (placedFrom === null || !isBefore(batchDay, placedFrom)) return true;
+	return firstSoldFrom !== undefined && !isBefore(firstSold ?? batchDay, firstSoldFrom);
 }
 
 interface EntryKeys {

@@ -4,7 +4,7 @@ import { formatExact } from '../quantity/decimal';
 import type { IsoDate, Percent } from '../quantity/units';
 import { composed, substancesOf, type Line, type Materials, type Part } from '../testing/formula';
 import { ingredientList, orderIsCertain } from './list';
-import type { AllergenEntry, IngredientList, Stay } from './types';
+import { GLOSSARY_ONLY, type AllergenEntry, type IngredientList, type Stay } from './types';
 
 /** 0.001 % and 0.01 %, as Annex III has them; names of our own. */
 const entry = (
@@ -42,7 +42,8 @@ function list(materials: Materials, lines: Line[], stay: Stay = 'leave-on', day 
 		stay,
 		batchDay: day as IsoDate,
 		substances: substancesOf(all),
-		allergens: ALLERGENS
+		allergens: ALLERGENS,
+		names: GLOSSARY_ONLY
 	});
 }
 const line = (material: string, percent: string): Line => ({ material, percent });

@@ -1,147 +1,168 @@
-import { amountOf } from '../composition/amounts';
-import type { Composition, CompositionRow, Contribution, WeighedPart } from '../composition/types';
-import type { Estimate } from '../quantity/range';
-import { compare, type Id, type Percent } from '../quantity/units';
-import { isSource, readAllergens, type AllergenReading } from './allergens';
-import { compareColourants, compareNames, euName } from './names';
-import { weakPairs } from './strength';
+import type { Composition } from '../composition/types';
+import { judgeArrangement, arranged } from './arrangement';
+import { identityOf, listedUnder, readCandidates, weighedAs, type Candidate, type Reading } from './candidates';
+import { compareByIndex } from './colour-names';
+import { MARKET_RULES, type MarketRule } from './market';
+import { compareNames, declaredName } from './names';
+import { weakPairs, type OrderedGroup } from './strength';
 import { widest } from './turning';
+import type { AllergenReading } from './allergens';
 import type {
 	Block,
 	IngredientList,
 	LeftOut,
 	ListEntry,
+	ListQuestion,
 	ListRequest,
 	Reason,
-	SubstanceIdentity,
-	ThresholdQuestion
+	Refusal,
+	WeakPair
 } from './types';
 
-export const RULE = {
-	order: 'eu-1223-2009/art-19-1-g',
-	names: 'eu-1223-2009/art-33'
-} as const;
-
-/** An entry before it has its place: its name and the constituents that it stands for. */
-interface Candidate {
-	readonly name: string;
-	readonly rows: readonly CompositionRow[];
-	readonly select: (part: WeighedPart) => boolean;
-	readonly colourant: boolean;
-	readonly allergen: AllergenReading | null;
-	readonly share: Estimate<Percent>;
+/** A candidate with the part of the list in which it stands. */
+export interface Placed {
+	readonly candidate: Candidate;
+	readonly block: Block;
 }
 
-const isListed = (part: { readonly role: string }) => part.role === 'ingredient' || part.role === 'carryOver';
+/**
+ * The ingredient list of one market with the reasons for every name: descending weight, below (or not above) 1 % in the same
+ * order, which is lawful in any; colourants behind by colour index; fragrance allergens above their threshold on the batch day
+ * under their group names; impurities, technical aids and justified carry-over left out. Ties by printed name. What the markets
+ * differ in stands in market.ts, with its sources.
+ */
+export const ingredientList = (composition: Composition, request: ListRequest): IngredientList =>
+	shadedList([composition], request);
 
 /**
- * The ingredient list of one market with the reasons for every name. EU: descending weight when added; below 1 % in the same
- * order, which is lawful in any; colourants last by CI number; fragrance allergens above their threshold on the batch day under
- * their group names; "(nano)"; impurities and processing aids left out. Exactly 1.00 % is ordered (house reading of an open point).
- * Ties by printed name. Source: Regulation (EC) 1223/2009, Art. 19(1)(g), Art. 33, Annex III.
+ * One list for all shades: lawful in each of them. Colourants that only some shades hold stand behind the market's mark for
+ * shades. @throws RangeError without a composition, or for compositions of different scales.
  */
-export function ingredientList(composition: Composition, request: ListRequest): IngredientList {
-	const allergens = readAllergens(composition, request);
-	const named = allergens.filter((reading) => reading.inForce && reading.above);
-	const candidates = candidatesOf(composition, request, named);
-	const onePercent = 10n ** BigInt(composition.shareDecimals);
-	const placed = candidates.map((candidate) => ({ candidate, block: blockOf(candidate, onePercent) })).sort(byPlace);
-	const entries = placed.map(({ candidate, block }) => entryOf(candidate, block));
-	const ordered = placed.filter(({ block }) => block !== 'colourant').map(({ candidate }) => candidate);
+export function shadedList(compositions: readonly Composition[], request: ListRequest): IngredientList {
+	const [first] = compositions;
+	if (!first || compositions.some(({ shareDecimals }) => shareDecimals !== first.shareDecimals))
+		throw new RangeError('the shades of a list stand on one scale');
+	const rule = MARKET_RULES[request.market];
+	const group: OrderedGroup = {
+		from: 10n ** BigInt(first.shareDecimals),
+		strict: rule.ordered === 'aboveOnePercent'
+	};
+	const reading = readCandidates(compositions, request, rule);
+	const usual = reading.candidates
+		.map((candidate) => ({ candidate, block: blockOf(candidate, group) }))
+		.sort((a, b) => byPlace(a, b, rule));
+	const pairsOf = (placed: readonly Placed[]) => allWeakPairs(compositions, placed, group, rule);
+	const { placed, refused } = placedAs(usual, request, rule, group, pairsOf);
 	return {
 		market: request.market,
-		shareDecimals: composition.shareDecimals,
-		entries,
-		text: entries.map((entry) => entry.name).join(', '),
-		weak: weakPairs(composition, ordered, onePercent),
-		leftOut: leftOutOf(composition, request, allergens, candidates),
-		questions: questionsOf(composition, allergens)
+		shareDecimals: first.shareDecimals,
+		entries: placed.map((each) => entryOf(each, rule)),
+		text: textOf(placed, rule),
+		weak: pairsOf(placed),
+		leftOut: leftOutOf(compositions, request, rule, reading),
+		questions: questionsOf(compositions, reading),
+		refused
 	};
 }
 
 /** False while the order depends on a supplier's range. */
 export const orderIsCertain = (list: IngredientList) => list.weak.length === 0;
 
-const identityOf = (request: ListRequest, id: Id<'substance'>): SubstanceIdentity => {
-	const identity = request.substances.get(id);
-	if (!identity) throw new RangeError(`the request does not identify the substance ${id}`);
-	return identity;
-};
+function placedAs(
+	usual: readonly Placed[],
+	{ arrangement, arrangementIs }: ListRequest,
+	rule: MarketRule,
+	group: OrderedGroup,
+	pairsOf: (placed: readonly Placed[]) => readonly WeakPair[]
+) {
+	if (!arrangement) return { placed: usual, refused: [] };
+	const judge = (placed: readonly Placed[]) => judgeArrangement(placed, rule, group, pairsOf(placed));
+	if (arrangementIs === 'kept') return keptPart(usual, arrangement, judge);
+	const wanted = arranged(usual, arrangement);
+	const refused = judge(wanted);
+	return { placed: refused.length === 0 ? wanted : usual, refused };
+}
 
-function candidatesOf(
-	composition: Composition,
-	request: ListRequest,
-	named: readonly AllergenReading[]
-): readonly Candidate[] {
-	const groups = new Map<string, CompositionRow[]>();
-	const nameOf = (row: CompositionRow) => {
-		const reading = row.use === 'colourant' ? undefined : named.find(({ substances }) => substances.has(row.substance));
-		return reading?.entry.labelName ?? euName(row, identityOf(request, row.substance));
-	};
-	for (const row of composition.rows) {
-		if (![...row.roles].some((role) => isListed({ role }))) continue;
-		const name = nameOf(row);
-		groups.set(name, [...(groups.get(name) ?? []), row]);
+/** Drops from the wish what has become unlawful, until the rest holds. */
+function keptPart(
+	usual: readonly Placed[],
+	arrangement: readonly string[],
+	judge: (placed: readonly Placed[]) => readonly Refusal[]
+) {
+	const pairOf = ({ name, before }: Refusal) => `${name}|${before}`;
+	const inAnyCase = new Set(judge(usual).map(pairOf));
+	const dropped: Refusal[] = [];
+	let wish = arrangement;
+	for (;;) {
+		const placed = arranged(usual, wish);
+		const wrong = judge(placed).filter((refusal) => !inAnyCase.has(pairOf(refusal)));
+		if (wrong.length === 0) return { placed, refused: dropped };
+		dropped.push(...wrong);
+		const names = new Set(wrong.map(({ name }) => name));
+		const left = wish.filter((name) => !names.has(name));
+		if (left.length === wish.length) return { placed: usual, refused: dropped };
+		wish = left;
 	}
-	const isSelected = (row: CompositionRow, select: Candidate['select']) =>
-		row.contributions.some((contribution) => select(weighedAs(row, contribution)));
-	const direct = [...groups].map(([name, rows]): Candidate => {
-		const keys = new Set(rows.map((row) => row.key));
-		const allergen = named.find(({ entry }) => entry.labelName === name) ?? null;
-		const select = (part: WeighedPart) =>
-			allergen
-				? isSource(part) && (keys.has(part.rowKey) || allergen.substances.has(part.substance))
-				: keys.has(part.rowKey) && isListed(part);
-		return {
-			name,
-			rows: allergen ? composition.rows.filter((row) => isSelected(row, select)) : rows,
-			select,
-			colourant: rows.every((row) => row.use === 'colourant'),
-			allergen,
-			share: amountOf(composition.weighed, select)
-		};
-	});
-	const inside = named
-		.filter(({ entry }) => !groups.has(entry.labelName))
-		.map((reading): Candidate => {
-			const select = (part: WeighedPart) => isSource(part) && reading.substances.has(part.substance);
-			const rows = composition.rows.filter((row) => isSelected(row, select));
-			return { name: reading.entry.labelName, rows, select, colourant: false, allergen: reading, share: reading.share };
-		});
-	return [...direct, ...inside];
 }
 
-const weighedAs = (row: CompositionRow, { constituent, role, part }: Contribution): WeighedPart => ({
-	rowKey: row.key,
-	constituent,
-	substance: row.substance,
-	role,
-	parent: null,
-	share: part
-});
-
-const blockOf = (candidate: Candidate, onePercent: bigint): Block => {
-	if (candidate.colourant) return 'colourant';
-	return candidate.share.typical >= onePercent ? 'ordered' : 'free';
-};
-
-interface Placed {
-	readonly candidate: Candidate;
-	readonly block: Block;
+function blockOf({ colourant, inEvery, share }: Candidate, { from, strict }: OrderedGroup): Block {
+	if (colourant) return inEvery ? 'colourant' : 'mayContain';
+	return share.typical > from || (!strict && share.typical === from) ? 'ordered' : 'free';
 }
 
-function byPlace(a: Placed, b: Placed): number {
-	const colourants = Number(a.block === 'colourant') - Number(b.block === 'colourant');
-	if (colourants !== 0) return colourants;
-	if (a.block === 'colourant') return compareColourants(a.candidate.name, b.candidate.name);
-	return (
-		compare(b.candidate.share.typical, a.candidate.share.typical) || compareNames(a.candidate.name, b.candidate.name)
+/** 0 by weight, 1 colourants, 2 the perfume where it stands last, 3 what only some shades hold. */
+function partOf({ candidate, block }: Placed, rule: MarketRule): number {
+	if (block === 'mayContain') return 3;
+	if (block === 'colourant') return 1;
+	return candidate.perfume && rule.perfume === 'last' ? 2 : 0;
+}
+
+function byPlace(a: Placed, b: Placed, rule: MarketRule): number {
+	const parts = partOf(a, rule) - partOf(b, rule);
+	if (parts !== 0) return parts;
+	if (a.candidate.colourant) return compareByIndex(a.candidate, b.candidate);
+	const [x, y] = [a.candidate.share.typical, b.candidate.share.typical];
+	if (x !== y) return x < y ? 1 : -1;
+	return compareNames(a.candidate.name, b.candidate.name);
+}
+
+function textOf(placed: readonly Placed[], { shades }: MarketRule): string {
+	const names = (some: readonly Placed[]) => some.map(({ candidate }) => candidate.name).join(', ');
+	const certain = placed.filter(({ block }) => block !== 'mayContain');
+	const perhaps = placed.filter(({ block }) => block === 'mayContain');
+	return names(certain) + (perhaps.length > 0 ? shades.opens + names(perhaps) + shades.closes : '');
+}
+
+/** A perfume behind all names that are no colourant has its place by another rule than weight, where the market has that rule. */
+export function ruledByWeight(placed: readonly Placed[], rule: MarketRule): readonly Placed[] {
+	const plain = placed.filter(({ candidate }) => !candidate.colourant);
+	if (rule.perfume !== 'last') return plain;
+	return plain.filter(
+		({ candidate }, at) => !candidate.perfume || plain.slice(at).some((later) => !later.candidate.perfume)
 	);
 }
 
-function entryOf(candidate: Candidate, block: Block): ListEntry {
+function allWeakPairs(
+	compositions: readonly Composition[],
+	placed: readonly Placed[],
+	group: OrderedGroup,
+	rule: MarketRule
+): readonly WeakPair[] {
+	const names = ruledByWeight(placed, rule).map(({ candidate }) => candidate);
+	const [only, ...more] = compositions;
+	if (only && more.length === 0) return weakPairs(only, names, group);
+	const found = new Map<string, WeakPair>();
+	for (const composition of compositions)
+		for (const pair of weakPairs(composition, names, group)) {
+			const key = `${pair.before}|${pair.after}`;
+			if (found.get(key)?.strength !== 'undecided') found.set(key, pair);
+		}
+	return [...found.values()];
+}
+
+function entryOf({ candidate, block }: Placed, rule: MarketRule): ListEntry {
 	const { name, rows, share, allergen } = candidate;
-	const listedDirectly = rows.some((row) => [...row.roles].some((role) => isListed({ role })));
+	const listedDirectly = rows.some(({ roles }) => roles.has('ingredient') || roles.has('carryOver'));
 	return {
 		name,
 		substances: [...new Set(rows.map((row) => row.substance))],
@@ -149,7 +170,7 @@ function entryOf(candidate: Candidate, block: Block): ListEntry {
 		block,
 		share,
 		allergen: allergen !== null && !listedDirectly,
-		why: [...contributionsOf(candidate), ...rulesOf(candidate, block)]
+		why: [...contributionsOf(candidate), ...rulesOf(candidate, block, rule)]
 	};
 }
 
@@ -160,59 +181,73 @@ const contributionsOf = ({ rows, select }: Candidate): Reason[] =>
 			.map((of) => ({ kind: 'contribution', of }) as const)
 	);
 
-function rulesOf(candidate: Candidate, block: Block): Reason[] {
-	const order = {
-		ordered: 'descending',
-		free: 'belowOnePercent',
-		colourant: 'colourantLast',
-		mayContain: 'colourantLast'
-	} as const;
+const ORDER_CODE = {
+	ordered: 'descending',
+	free: 'belowOnePercent',
+	colourant: 'colourantLast',
+	mayContain: 'mayContain'
+} as const satisfies Record<Block, string>;
+
+function rulesOf(candidate: Candidate, block: Block, { orderRule, nameRule, nano }: MarketRule): Reason[] {
 	const rules: Reason[] = [
-		{ kind: 'rule', ruleId: RULE.order, code: order[block] },
-		{ kind: 'rule', ruleId: RULE.names, code: 'name' }
+		{ kind: 'rule', ruleId: orderRule, code: ORDER_CODE[block] },
+		{ kind: 'rule', ruleId: nameRule, code: 'name' }
 	];
-	if (candidate.name === 'Parfum' || candidate.name === 'Aroma') {
-		rules.push({ kind: 'rule', ruleId: RULE.order, code: 'perfume' });
-	}
-	if (candidate.rows.some((row) => row.nano)) rules.push({ kind: 'rule', ruleId: RULE.order, code: 'nano' });
+	if (candidate.perfume) rules.push({ kind: 'rule', ruleId: orderRule, code: 'perfume' });
+	if (nano && candidate.rows.some((row) => row.nano)) rules.push({ kind: 'rule', ruleId: orderRule, code: 'nano' });
 	if (candidate.allergen) rules.push({ kind: 'rule', ruleId: candidate.allergen.entry.ruleId, code: 'allergen' });
 	return rules;
 }
 
 function leftOutOf(
-	composition: Composition,
+	compositions: readonly Composition[],
 	request: ListRequest,
-	allergens: readonly AllergenReading[],
-	candidates: readonly Candidate[]
+	rule: MarketRule,
+	{ candidates, allergens }: Reading
 ): LeftOut[] {
+	const isListed = listedUnder(compositions, request);
 	const printed = new Set(candidates.flatMap((candidate) => candidate.rows.map((row) => row.key)));
-	return composition.rows
-		.filter((row) => !printed.has(row.key))
-		.map((row): LeftOut => {
-			const name = euName(row, identityOf(request, row.substance));
-			const common = { name, substances: [row.substance], share: row.share };
-			if (row.roles.has('ofWhich')) {
-				const reading = allergens.find(({ substances }) => substances.has(row.substance));
-				if (!reading) return { ...common, reason: 'namedByPerfume', ruleId: RULE.order, limit: null };
-				const reason = reading.inForce ? 'allergenAtOrBelow' : 'allergenNotYet';
-				return { ...common, share: reading.share, reason, ruleId: reading.entry.ruleId, limit: reading.limit };
-			}
-			const reason = row.roles.has('impurity') ? 'impurity' : 'processingAid';
-			return { ...common, reason, ruleId: RULE.order, limit: null };
-		})
-		.sort((a, b) => compareNames(a.name, b.name));
+	const left = new Map<string, LeftOut>();
+	for (const row of compositions.flatMap(({ rows }) => rows)) {
+		if (printed.has(row.key) || left.has(row.key) || row.contributions.some(isListed)) continue;
+		const { name } = declaredName(rule, row, identityOf(request, row.substance), request.names);
+		const common = { name, substances: [row.substance], share: row.share, ruleId: rule.orderRule, limit: null };
+		left.set(row.key, { ...common, ...reasonOf(row, allergens) });
+	}
+	return [...left.values()].sort((a, b) => compareNames(a.name, b.name));
 }
 
-/** Thresholds that the ranges straddle: it cannot be told yet whether the name must be printed. */
-const questionsOf = (composition: Composition, allergens: readonly AllergenReading[]): ThresholdQuestion[] =>
-	allergens
-		.filter(({ inForce, share, limit }) => inForce && share.low <= limit && share.high > limit)
-		.map(({ entry, share, limit, above, substances }) => ({
-			kind: 'allergen',
-			name: entry.labelName,
-			share,
-			limit,
-			ruleId: entry.ruleId,
-			printed: above,
-			ask: widest(composition, (part) => substances.has(part.substance))
-		}));
+function reasonOf(
+	row: Candidate['rows'][number],
+	allergens: readonly AllergenReading[]
+): Pick<LeftOut, 'reason'> & Partial<LeftOut> {
+	if (row.roles.has('carryOver')) return { reason: 'carryOver' };
+	if (!row.roles.has('ofWhich')) return { reason: row.roles.has('impurity') ? 'impurity' : 'processingAid' };
+	const reading = allergens.find(({ substances }) => substances.has(row.substance));
+	if (!reading) return { reason: 'namedByPerfume' };
+	const reason = reading.inForce ? 'allergenAtOrBelow' : 'allergenNotYet';
+	return { share: reading.share, reason, ruleId: reading.entry.ruleId, limit: reading.limit };
+}
+
+/** What it cannot be told yet: thresholds that the ranges straddle, and colours whose listed name depends on their salt. */
+function questionsOf(compositions: readonly Composition[], { candidates, allergens }: Reading): ListQuestion[] {
+	const ask = (select: Candidate['select']) =>
+		compositions.map((composition) => widest(composition, select)).find((material) => material !== null) ?? null;
+	const open = allergens.filter(({ inForce, share, limit }) => inForce && share.low <= limit && share.high > limit);
+	const thresholds = [...new Map(open.map((reading) => [reading.entry.labelName, reading])).values()].map(
+		({ entry, share, limit, above, substances }) =>
+			({
+				kind: 'allergen',
+				name: entry.labelName,
+				share,
+				limit,
+				ruleId: entry.ruleId,
+				printed: above,
+				ask: ask((part) => substances.has(part.substance))
+			}) as const
+	);
+	const names = candidates.flatMap(({ name, doubt, rows }) =>
+		doubt ? [{ kind: 'colourName', name, doubt, ask: rows[0]?.contributions[0]?.material ?? null } as const] : []
+	);
+	return [...thresholds, ...names];
+}

@@ -37,8 +37,13 @@ function chain(points: readonly Point[]): Point[] {
 export const minkowski = (a: readonly Point[], b: readonly Point[]): readonly Point[] =>
 	hull(a.flatMap((p) => b.map((q) => ({ x: p.x + q.x, y: p.y + q.y }))));
 
-/** Whether the convex polygon holds a point with y > x and y ≥ least. */
-export function reachesAbove(polygon: readonly Point[], least: bigint): boolean {
+/** Whether the convex polygon holds a point with y > x and y ≥ from (or y > from, when strict). */
+export function reachesAbove(
+	polygon: readonly Point[],
+	{ from: least, strict }: { readonly from: bigint; readonly strict: boolean }
+): boolean {
+	// Where some point lies above `from`, one that only touches it and has y > x has others just above it.
+	if (strict && !polygon.some((point) => point.y > least)) return false;
 	if (polygon.some((point) => point.y >= least && point.y > point.x)) return true;
 	return polygon.some((from, at) => {
 		const to = polygon[(at + 1) % polygon.length];

@@ -7,6 +7,8 @@ import { composed, type Formulas, type Materials, type Part } from '../testing/f
 import { weakPairs } from './strength';
 import type { PlacedName } from './types';
 
+const atLeast = (from: bigint) => ({ from, strict: false });
+
 /** In the given order, each name standing for its substance. */
 const placedIn = (composition: Composition, names: readonly string[]): PlacedName[] =>
 	names.map((name) => {
@@ -16,7 +18,7 @@ const placedIn = (composition: Composition, names: readonly string[]): PlacedNam
 const onePercent = (composition: Composition) => 10n ** BigInt(composition.shareDecimals);
 function weak(materials: Materials, formulas: Formulas, names: readonly string[]) {
 	const composition = composed(materials, formulas);
-	return weakPairs(composition, placedIn(composition, names), onePercent(composition));
+	return weakPairs(composition, placedIn(composition, names), atLeast(onePercent(composition)));
 }
 const pure = (inci: string): Part[] => [{ inci, typical: '100' }];
 const turn = (pair: ReturnType<typeof weak>[number] | undefined) =>
@@ -219,7 +221,7 @@ test('a pair is weak exactly when some composition turns it', () => {
 			);
 			const least = LIMIT_PERCENT * onePercent(composition);
 			const names = ['A', 'B', 'C'];
-			const found = weakPairs(composition, placedIn(composition, names), least).map(
+			const found = weakPairs(composition, placedIn(composition, names), atLeast(least)).map(
 				({ before, after }) => before + after
 			);
 			const expected = ['AB', 'AC', 'BC'].filter((pair) => {
@@ -244,7 +246,7 @@ test('the turning value lies within the range of the constituent that it names',
 					]
 				}
 			);
-			for (const { turnsAt } of weakPairs(composition, placedIn(composition, ['A', 'B', 'C']), 0n)) {
+			for (const { turnsAt } of weakPairs(composition, placedIn(composition, ['A', 'B', 'C']), atLeast(0n))) {
 				if (!turnsAt) continue;
 				const material = composition.weighed.find((each) => each.material === turnsAt.material);
 				const share = material?.parts.find((each) => each.constituent === turnsAt.constituent)?.share;
@@ -275,7 +277,7 @@ test('narrowing a range never makes a pair weak that was certain', () => {
 				formulas
 			);
 			const pairsOf = (composition: Composition) =>
-				weakPairs(composition, placedIn(composition, ['A', 'B', 'C']), onePercent(composition)).map(
+				weakPairs(composition, placedIn(composition, ['A', 'B', 'C']), atLeast(onePercent(composition))).map(
 					({ before, after }) => before + after
 				);
 			const before = pairsOf(wide);

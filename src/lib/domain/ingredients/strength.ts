@@ -6,31 +6,37 @@ import { hull, minkowski, reachesAbove, type Point } from './polygon';
 import { describe, rangedParts, type RangedPart, type Span, type Stake } from './turning';
 import type { PlacedName, WeakPair } from './types';
 
+/** The shares that a market orders by weight: at least `from`, or only more than it. */
+export interface OrderedGroup {
+	readonly from: bigint;
+	readonly strict: boolean;
+}
+
 const NONE: Span = { low: 0n, high: 0n };
 
 /**
  * Every pair i printed before j for which some composition within the suppliers' ranges has x_j > x_i with x_j in the ordered
- * group (at or above `orderedFrom`): not only neighbours. Exact for what stands in the sum of its material; range lines and
+ * group: not only neighbours. Exact for what stands in the sum of its material; range lines and
  * parts of parts that several names share are enclosed by a hull, so that a weak pair is never missed.
  */
 export function weakPairs(
 	composition: Composition,
 	placed: readonly PlacedName[],
-	orderedFrom: bigint
+	group: OrderedGroup
 ): readonly WeakPair[] {
 	const stakes = placed.map((name) => stakeOf(composition, name));
 	return stakes.flatMap((before, at) =>
 		stakes
 			.slice(at + 1)
-			.filter(({ share }) => canBeOrdered(share, orderedFrom) && share.high > before.share.low)
-			.filter((after) => canTurn(before, after, orderedFrom))
-			.map((after) => describe(before, after, orderedFrom))
+			.filter(({ share }) => canBeOrdered(share, group) && share.high > before.share.low)
+			.filter((after) => canTurn(before, after, group))
+			.map((after) => describe(before, after, group.from))
 	);
 }
 
 /** "< 1 %" stays below 1 %: an open bound that only just reaches the group never enters it. */
-const canBeOrdered = (share: Estimate<Percent>, orderedFrom: bigint) =>
-	share.high > orderedFrom || (share.high === orderedFrom && !share.highOpen);
+const canBeOrdered = (share: Estimate<Percent>, { from, strict }: OrderedGroup) =>
+	share.high > from || (!strict && share.high === from && !share.highOpen);
 
 function stakeOf(composition: Composition, name: PlacedName): Stake {
 	const held = new Map<WeighedMaterial, Span>();
@@ -64,7 +70,7 @@ const sharedBy = (before: Stake, after: Stake): readonly WeighedMaterial[] =>
 		.map(([material]) => material);
 const varies = ({ low, high }: Span) => low < high;
 
-function canTurn(before: Stake, after: Stake, orderedFrom: bigint): boolean {
+function canTurn(before: Stake, after: Stake, group: OrderedGroup): boolean {
 	const shared = sharedBy(before, after);
 	const shapes = new Map(shared.map((material) => [material, shapeOf(material, before, after)]));
 	const outlines: (readonly Point[])[] = [];
@@ -78,17 +84,17 @@ function canTurn(before: Stake, after: Stake, orderedFrom: bigint): boolean {
 			(sum, material) => minkowski(sum, scaled(shapes.get(material) ?? [], material.corners[corner] ?? 0n)),
 			apart
 		);
-		if (reachesAbove(outline, orderedFrom)) return true;
+		if (reachesAbove(outline, group)) return true;
 		outlines.push(outline);
 	}
-	return before.ends.length > 1 && reachesBetween(outlines, orderedFrom);
+	return before.ends.length > 1 && reachesBetween(outlines, group);
 }
 
 /** Between the corners of range lines: only where some corner is ordered and another one turned can a mixture be both. */
-function reachesBetween(outlines: readonly (readonly Point[])[], orderedFrom: bigint): boolean {
+function reachesBetween(outlines: readonly (readonly Point[])[], group: OrderedGroup): boolean {
 	const points = outlines.flat();
-	if (!points.some(({ y }) => y >= orderedFrom) || !points.some(({ x, y }) => y > x)) return false;
-	return reachesAbove(hull(points), orderedFrom);
+	if (!points.some(({ y }) => y >= group.from) || !points.some(({ x, y }) => y > x)) return false;
+	return reachesAbove(hull(points), group);
 }
 
 const without = (all: Span, part: Span): Span => ({ low: all.low - part.low, high: all.high - part.high });

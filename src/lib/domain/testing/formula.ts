@@ -1,6 +1,6 @@
 import { compose } from '../composition/compose';
 import type { Composition, CompositionRequest, FormulaLine } from '../composition/types';
-import { colourIndexIn } from '../ingredients/names';
+import { colourIndexIn } from '../ingredients/colour-names';
 import type { SubstanceIdentity } from '../ingredients/types';
 import { substanceKey } from '../material/substance-key';
 import type { Constituent, MaterialVersion, PartRole, Use } from '../material/types';

@@ -323,12 +323,24 @@ interface CopyEffectTable extends ProductScope {
 	id: string;
 	copy_id: string;
 	effect: 'saysSomethingElse' | 'untouched';
-	cause_kind: 'formula' | 'material';
+	cause_kind: 'formula' | 'material' | 'product';
 	cause_version_id: string;
 	cause: string;
 	old_text: string;
 	new_text: string;
 	at: Generated<Date>;
+}
+interface ArrangementTable extends ProductScope, Made {
+	id: string;
+	market: Market;
+	ordering: Json<readonly string[]>;
+}
+interface CarryOverDecisionTable extends ProductScope, Made {
+	id: string;
+	substance_id: string;
+	material_id: string;
+	left_out: boolean;
+	reason: string;
 }
 interface ClaimTable extends ProductScope, Made {
 	id: string;
@@ -436,6 +448,8 @@ export interface Database {
 	label_copy: LabelCopyTable;
 	label_approval: LabelApprovalTable;
 	copy_effect: CopyEffectTable;
+	arrangement: ArrangementTable;
+	carry_over_decision: CarryOverDecisionTable;
 	claim: ClaimTable;
 	claim_criterion: ClaimCriterionTable;
 	claim_evidence: ClaimEvidenceTable;

@@ -1,5 +1,5 @@
 import type { CompositionRequest, FormulaLine } from '$lib/domain/composition/types';
-import { colourIndexIn } from '$lib/domain/ingredients/names';
+import { colourIndexIn } from '$lib/domain/ingredients/colour-names';
 import type { SubstanceIdentity } from '$lib/domain/ingredients/types';
 import { casFault, ecFault } from '$lib/domain/material/identifiers';
 import { substanceKey } from '$lib/domain/material/substance-key';
@@ -19,7 +19,7 @@ const line = (text: string | undefined) =>
 type ConstituentInput = ComputeInput['materials'][string]['constituents'][number];
 
 /** @throws Refused 'invalid' for a wrong check digit and for parts of something that the material does not hold. */
-export function refuseWrongIdentities(input: ComputeInput): void {
+export function refuseWrongIdentities(input: Pick<ComputeInput, 'materials'>): void {
 	const errors: ProblemEntry[] = [];
 	for (const [name, material] of Object.entries(input.materials)) {
 		material.constituents.forEach((constituent, index) => {
@@ -54,7 +54,40 @@ const parentIndex = (constituents: readonly ConstituentInput[], child: Constitue
 			each !== child && each.ofWhich === undefined && substanceKey(each.inci) === substanceKey(child.ofWhich ?? '')
 	);
 
-export function compositionRequestOf(input: ComputeInput): CompositionRequest {
+/** @throws Refused 'invalid' when the formula asked for was not sent. */
+export function refuseMissingFormula(input: Pick<ComputeInput, 'formula' | 'formulas'>): void {
+	if (Object.hasOwn(input.formulas, input.formula)) return;
+	const message = 'There is no formula of this name in the call.';
+	throw new Refused('invalid', { errors: [{ path: 'formula', value: input.formula, message }] });
+}
+
+/** The formula, or each of its shades: the shade's lines lie inside the 100 of the formula, whose q.s. line gives way. */
+export function compositionRequestsOf(
+	input: ComputeInput
+): readonly { readonly name: string | null; readonly request: CompositionRequest }[] {
+	const request = compositionRequestOf(input);
+	const shades = Object.entries(input.shades ?? {});
+	if (shades.length === 0) return [{ name: null, request }];
+	return shades.map(([name, lines]) => ({ name, request: withShade(request, name, lines) }));
+}
+
+function withShade(
+	request: CompositionRequest,
+	name: string,
+	lines: NonNullable<ComputeInput['shades']>[string]
+): CompositionRequest {
+	const outer = request.formulas.get(request.formula);
+	if (!outer) return request;
+	const own = lines.map((each, index) => lineOf(`${name}/`, each, index));
+	return {
+		...request,
+		formulas: new Map([...request.formulas, [request.formula, { ...outer, lines: [...outer.lines, ...own] }]])
+	};
+}
+
+export function compositionRequestOf(
+	input: Pick<ComputeInput, 'formula' | 'formulas' | 'materials'>
+): CompositionRequest {
 	return {
 		formula: input.formula as Id<'formula'>,
 		materials: new Map(

@@ -1,7 +1,9 @@
 import { describe, expect, test } from 'vitest';
-import { computeInputSchema } from '$lib/schemas/compute';
+import { batchSheetInputSchema, computeInputSchema } from '$lib/schemas/compute';
 import { Refused } from '../refused';
-import { computeComposition, computeLists } from './compute';
+import { computeComposition } from './compute';
+import { computeBatchSheet } from './compute-batch-sheet';
+import { computeLists } from './compute-lists';
 
 const input = (more: object = {}) =>
 	computeInputSchema.parse({
@@ -95,4 +97,105 @@ describe('lists', () => {
 		expect(answered).not.toHaveProperty('assumed');
 		expect(JSON.stringify(answered)).toContain('"material":"W","question":"allergens"');
 	});
+});
+
+describe('lists of several markets', () => {
+	test('each by its own order and names', () => {
+		const { lists } = computeLists(input({ markets: ['EU', 'US', 'CA'] }));
+		expect(Object.fromEntries(Object.entries(lists).map(([market, { text }]) => [market, text]))).toEqual({
+			EU: 'Aqua, Sodium Chloride, Glycerin, Titanium Dioxide (nano), Parfum, Linalool',
+			US: 'Water, Sodium Chloride, Glycerin, Titanium Dioxide, Fragrance',
+			CA: 'Aqua/Water/Eau, Sodium Chloride, Glycerin, Titanium Dioxide, Linalool, Parfum'
+		});
+	});
+	// Salt without a range: with one, its place before glycerin would be weak, and every order with it refused.
+	const fixed = {
+		BASE: {
+			lines: [
+				{ material: 'M1', percent: '5.00' },
+				{ material: 'W', qs: true }
+			]
+		},
+		VAR: {
+			lines: [
+				{ formula: 'BASE', qs: true },
+				{ material: 'B', percent: '3' }
+			]
+		}
+	};
+	const names = ['Aqua', 'Sodium Chloride', 'Glycerin', 'Titanium Dioxide (nano)', 'Linalool', 'Parfum'];
+	test('an arrangement is kept where it is lawful', () => {
+		const { lists } = computeLists(input({ formulas: fixed, arrangement: { EU: names } }));
+		expect(lists).toMatchObject({ EU: { text: names.join(', ') } });
+		expect(lists.EU).not.toHaveProperty('refused');
+	});
+	test('and refused with the pair where it is not', () => {
+		const wrong = ['Aqua', 'Glycerin', 'Sodium Chloride', ...names.slice(3)];
+		const { lists } = computeLists(input({ arrangement: { EU: wrong } }));
+		expect(lists).toMatchObject({ EU: { refused: [{ name: 'Glycerin', before: 'Sodium Chloride', code: 'weight' }] } });
+	});
+	test('a name that is not printed, or is missing, is named with its place', () => {
+		const call = () => computeLists(input({ arrangement: { EU: [...names.slice(1), 'Urea'] } }));
+		expect(call).toThrow(
+			expect.objectContaining({
+				data: {
+					errors: [
+						expect.objectContaining({ path: 'arrangement.EU.5', value: 'Urea' }),
+						expect.objectContaining({ path: 'arrangement.EU', value: 'Aqua' })
+					]
+				}
+			})
+		);
+	});
+	test('what only some shades hold stands behind the mark', () => {
+		const pigment = (inci: string) => ({ constituents: [{ inci, typical: '100', use: 'colourant' }] });
+		const materials = {
+			W: { constituents: [{ inci: 'Aqua', typical: '100' }] },
+			P1: pigment('CI 77491'),
+			P2: pigment('CI 77492')
+		};
+		const { lists } = computeLists(
+			input({
+				materials,
+				formulas: { VAR: { lines: [{ material: 'W', qs: true }] } },
+				shades: {
+					'01': [{ material: 'P1', percent: '3' }],
+					'02': [
+						{ material: 'P1', percent: '1' },
+						{ material: 'P2', percent: '1' }
+					]
+				}
+			})
+		);
+		expect(lists).toMatchObject({
+			EU: {
+				text: 'Aqua, CI 77491, [+/- CI 77492]',
+				entries: [{ block: 'ordered' }, { block: 'colourant', low: '1', high: '3' }, { block: 'mayContain', low: '0' }]
+			}
+		});
+	});
+});
+
+describe('a batch sheet', () => {
+	const sheet = (more: object) => {
+		const { materials, formulas, formula } = input();
+		return computeBatchSheet(
+			batchSheetInputSchema.parse({ materials, formulas, formula, size: '4000', unit: 'g', step: '0.01', ...more })
+		);
+	};
+	test('is exploded through the bulk and sums to the size', () => {
+		// 4,000 g: salt 3 % = 120 g; the bulk 3,880 g with 5 % of M1 = 194 g, water the rest.
+		expect(sheet({})).toMatchObject({
+			lines: [
+				{ material: 'M1', path: ['VAR', 'BASE', 'M1'], amount: '194', exact: '194' },
+				{ material: 'W', path: ['VAR', 'BASE', 'W'], amount: '3686', takesRounding: true },
+				{ material: 'B', path: ['VAR', 'B'], amount: '120' }
+			],
+			total: '4000'
+		});
+	});
+	test('of no whole number of balance steps is refused', () => {
+		expect(() => sheet({ size: '100.005' })).toThrow(Refused);
+	});
+	test.each(['0', '-1', 'much'])('of %s g is no batch', (size) => expect(() => sheet({ size })).toThrow());
 });

@@ -18,12 +18,18 @@ export function standingOf(reading: Reading, beingRechecked: boolean): ListStand
 		kind: 'list',
 		text: list.text,
 		weak: list.weak.map(({ before, after }) => ({ before, after })),
-		questions: list.questions.map(({ name, share, limit }) => ({
-			name,
-			low: text(share.low),
-			high: text(share.high),
-			limit: text(limit)
-		}))
+		questions: list.questions.flatMap((question) =>
+			question.kind === 'allergen'
+				? [
+						{
+							name: question.name,
+							low: text(question.share.low),
+							high: text(question.share.high),
+							limit: text(question.limit)
+						}
+					]
+				: []
+		)
 	};
 }
 

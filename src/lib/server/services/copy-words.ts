@@ -16,9 +16,15 @@ export const instant = (iso: string) => `${day(iso)}, ${iso.slice(11, 16)}`;
 export const rulesWords = (ruleBook: string) => `Reg. (EC) 1223/2009, rule book ${ruleBook}`;
 
 /** Without a kind the product is being checked again; without a name the cause is told by its kind alone. */
-export function outOfDateWords(kind: 'formula' | 'material' | null, name: string | null): string {
+const CAUSE = {
+	formula: 'a new version of the formula',
+	material: 'new data of a raw material',
+	product: 'a decision about the list'
+} as const;
+
+export function outOfDateWords(kind: 'formula' | 'material' | 'product' | null, name: string | null): string {
 	if (kind === null) return 'What this copy rests on has changed and is being checked again.';
-	const cause = name ?? (kind === 'formula' ? 'a new version of the formula' : 'new data of a raw material');
+	const cause = name ?? CAUSE[kind];
 	return `The ingredient list reads otherwise since ${cause}.`;
 }
 

@@ -1,4 +1,4 @@
-import { colourIndexIn } from '$lib/domain/ingredients/names';
+import { colourIndexIn } from '$lib/domain/ingredients/colour-names';
 import { resolveMaterial } from '$lib/domain/material/resolve';
 import { substanceKey } from '$lib/domain/material/substance-key';
 import type { MaterialFault, MaterialVersion } from '$lib/domain/material/types';

@@ -12,7 +12,10 @@ import { projectionOf, readProduct, type HashedProjection, type Reading } from '
 /** What was released. `label` names it for people, as in "Brackmul GA-20, version 5". */
 export type Cause =
 	| { readonly kind: 'formula'; readonly versionId: string; readonly formulaId: string; readonly label: string }
-	| { readonly kind: 'material'; readonly versionId: string; readonly materialId: string; readonly label: string };
+	| { readonly kind: 'material'; readonly versionId: string; readonly materialId: string; readonly label: string }
+	/** A decision about the product itself; `versionId` is the decision's. */
+	| { readonly kind: 'product'; readonly versionId: string; readonly label: string };
+type Release = Exclude<Cause, { kind: 'product' }>;
 
 export interface CopyEffect {
 	readonly productId: string;
@@ -32,21 +35,24 @@ const LIVE: readonly CopyState[] = ['inReview', 'approvedByLaboratory', 'approve
  * Carries a release to every product that it may touch, in the release's own transaction: raises what the product's statements
  * are compared with, restamps the projection and records for each live copy whether its text moved.
  */
-export async function moveProducts(trx: Trx, actor: Actor, cause: Cause): Promise<readonly CopyEffect[]> {
+export async function moveProducts(trx: Trx, actor: Actor, cause: Release): Promise<readonly CopyEffect[]> {
 	const formulas = cause.kind === 'formula' ? [cause.formulaId] : await formulasUsingMaterial(trx, cause.materialId);
 	const products = await productsUsingFormulas(trx, formulas);
 	const effects: CopyEffect[] = [];
-	for (const id of products) {
-		await trx
-			.updateTable('product')
-			.set({ inputs_rev: sql<string>`inputs_rev + 1` })
-			.where('id', '=', id)
-			.execute();
-		const product = await productById(trx, id);
-		const { reading } = await stampProduct(trx, product, today());
-		effects.push(...(await recordEffects(trx, actor, product, reading, cause)));
-	}
+	for (const id of products) effects.push(...(await moveProduct(trx, actor, id, cause)));
 	return effects;
+}
+
+/** The same for one product, whose own decisions move it too. */
+export async function moveProduct(trx: Trx, actor: Actor, id: string, cause: Cause): Promise<readonly CopyEffect[]> {
+	await trx
+		.updateTable('product')
+		.set({ inputs_rev: sql<string>`inputs_rev + 1` })
+		.where('id', '=', id)
+		.execute();
+	const product = await productById(trx, id);
+	const { reading } = await stampProduct(trx, product, today());
+	return recordEffects(trx, actor, product, reading, cause);
 }
 
 /** Recomputes what the product's statements rest on and stamps it with the product's present revision of inputs. */

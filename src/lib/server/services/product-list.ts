@@ -1,5 +1,5 @@
 import type { Contribution } from '$lib/domain/composition/types';
-import type { IngredientList, ListEntry } from '$lib/domain/ingredients/types';
+import type { IngredientList, ListEntry, Market } from '$lib/domain/ingredients/types';
 import { formatExact } from '$lib/domain/quantity/decimal';
 import { formatRatio } from '$lib/domain/quantity/ratio';
 import { PART_DECIMALS, type IsoDate } from '$lib/domain/quantity/units';
@@ -10,6 +10,7 @@ import type {
 	EntryView,
 	ListView,
 	Place,
+	QuestionView,
 	RuleView,
 	WeighedView
 } from '$lib/schemas/list-view';
@@ -18,6 +19,7 @@ import type { Actor } from '../access/actor';
 import { productBySlug, type ProductRow } from '../db/products';
 import { decisionOn, documentTitles, formulaCodes, type DocumentTitle } from '../db/reasons';
 import { withActor, type Trx } from '../db/with-actor';
+import { refusalView } from './list-decisions';
 import { readProduct, type Basis, type Reading } from './readings';
 
 /** Decimals shown of a turning value that does not end: 0.1 ppb of a material is eight, four are read with ease. */
@@ -32,12 +34,17 @@ export interface ProductListView {
 	readonly list: ListView | null;
 }
 
-/** A product's EU list on a batch day, with every reason behind every name. */
-export function readProductList(actor: Actor, slug: string, batchDay: IsoDate): Promise<ProductListView> {
+/** A product's list of one market on a batch day, with every reason behind every name. */
+export function readProductList(
+	actor: Actor,
+	slug: string,
+	batchDay: IsoDate,
+	market: Market = 'EU'
+): Promise<ProductListView> {
 	requireAct(actor, 'readLaboratory');
 	return withActor(actor, async (trx) => {
 		const product = await productBySlug(trx, slug);
-		const reading = await readProduct(trx, product, batchDay);
+		const reading = await readProduct(trx, product, batchDay, market);
 		if (reading.kind === 'nothingReleased') return { product, state: reading.kind, basis: null, list: null };
 		const codes = await formulaCodes(trx, [...reading.basis.formulaVersions.keys()]);
 		const basis = basisView(reading.basis, codes);
@@ -67,6 +74,11 @@ async function listView(trx: Trx, reading: Read, codes: ReadonlyMap<string, stri
 			constituents.map((part) => [part.id, part.source])
 		)
 	);
+	const substances = new Map(
+		[...reading.loaded.materials.values()].flatMap(({ constituents }) =>
+			constituents.map((part) => [part.id, part.substance])
+		)
+	);
 	const documents = await documentTitles(trx, [
 		...new Set([...sources.values()].flatMap((source) => source?.document ?? []))
 	]);
@@ -77,6 +89,9 @@ async function listView(trx: Trx, reading: Read, codes: ReadonlyMap<string, stri
 		const formula = of.formulas.at(-1) ?? '';
 		return {
 			material: material?.tradeName ?? '',
+			materialId: of.material,
+			substanceId: substances.get(of.constituent) ?? '',
+			carryOver: of.role === 'carryOver',
 			materialCode: material?.code ?? '',
 			materialNumber: material?.number ?? 0,
 			formulaCode: codes.get(formula) ?? '',
@@ -108,6 +123,9 @@ async function listView(trx: Trx, reading: Read, codes: ReadonlyMap<string, stri
 		};
 	};
 	return {
+		market: list.market,
+		arranged: reading.arranged,
+		refused: list.refused.map((each) => refusalView(each, reading)),
 		entries: list.entries.map(entryView),
 		text: list.text,
 		weak: list.weak.map((pair) => ({
@@ -126,12 +144,21 @@ async function listView(trx: Trx, reading: Read, codes: ReadonlyMap<string, stri
 			typical: text(share.typical),
 			limit: limit === null ? null : text(limit)
 		})),
-		questions: list.questions.map(({ name, share, limit }) => ({
-			name,
-			low: text(share.low),
-			high: text(share.high),
-			limit: text(limit)
-		})),
+		questions: list.questions.map((question): QuestionView =>
+			question.kind === 'allergen'
+				? {
+						kind: 'threshold',
+						name: question.name,
+						low: text(question.share.low),
+						high: text(question.share.high),
+						limit: text(question.limit)
+					}
+				: {
+						kind: 'colourName',
+						name: question.name,
+						candidates: question.doubt.kind === 'colourForm' ? question.doubt.candidates : []
+					}
+		),
 		decision: await releaseDecision(trx, reading.basis.formulaVersion.id)
 	};
 }

@@ -2,9 +2,9 @@ import { listProjection, type Projection } from '$lib/domain/change/projection';
 import { compose } from '$lib/domain/composition/compose';
 import type { Composition, CompositionFault } from '$lib/domain/composition/types';
 import { ingredientList } from '$lib/domain/ingredients/list';
-import type { IngredientList, SubstanceIdentity } from '$lib/domain/ingredients/types';
+import type { IngredientList, ListRequest, Market, SubstanceIdentity } from '$lib/domain/ingredients/types';
 import type { Id, IsoDate } from '$lib/domain/quantity/units';
-import { EU_ALLERGENS } from '$lib/reference';
+import { ALLERGENS, NAME_BOOK } from '$lib/reference';
 import {
 	answeringFormulaVersion,
 	loadMaterials,
@@ -14,6 +14,7 @@ import {
 	type MaterialVersionRef,
 	type Tree
 } from '../db/basis';
+import { listDecisions } from '../db/list-decisions';
 import type { ProductRow } from '../db/products';
 import type { Trx } from '../db/with-actor';
 import { contentHash, sha256 } from '../hash';
@@ -38,10 +39,40 @@ export type Reading =
 			readonly substances: ReadonlyMap<Id<'substance'>, SubstanceIdentity>;
 			readonly composition: Composition;
 			readonly list: IngredientList;
+			/** An officer's order is kept for this list. */
+			readonly arranged: boolean;
 	  };
 
-/** Composition and EU list of a product from the versions that answer for it on the batch day. */
-export async function readProduct(trx: Trx, product: ProductRow, batchDay: IsoDate): Promise<Reading> {
+/** Composition and one market's list of a product from the versions that answer for it on the batch day. */
+export async function readProduct(
+	trx: Trx,
+	product: ProductRow,
+	batchDay: IsoDate,
+	market: Market = 'EU'
+): Promise<Reading> {
+	const { arrangement, leftOutCarryOver } = await listDecisions(trx, product.id, market);
+	return read(trx, product, batchDay, {
+		market,
+		leftOutCarryOver,
+		...(arrangement ? { arrangement, arrangementIs: 'kept' } : {})
+	});
+}
+
+/** As readProduct, with an order that somebody wishes in place of the kept one. */
+export async function readArranged(
+	trx: Trx,
+	product: ProductRow,
+	batchDay: IsoDate,
+	market: Market,
+	arrangement: readonly string[]
+): Promise<Reading> {
+	const { leftOutCarryOver } = await listDecisions(trx, product.id, market);
+	return read(trx, product, batchDay, { market, leftOutCarryOver, arrangement, arrangementIs: 'kept' });
+}
+
+type Wanted = Pick<ListRequest, 'market' | 'leftOutCarryOver' | 'arrangement' | 'arrangementIs'>;
+
+async function read(trx: Trx, product: ProductRow, batchDay: IsoDate, wanted: Wanted): Promise<Reading> {
 	const version = await answeringFormulaVersion(trx, product.formulaId, product.pinnedVersionId);
 	if (!version) return { kind: 'nothingReleased' };
 	const tree = await loadTree(trx, version);
@@ -54,13 +85,23 @@ export async function readProduct(trx: Trx, product: ProductRow, batchDay: IsoDa
 	});
 	if (!outcome.ok) return { kind: 'faults', basis, faults: outcome.faults };
 	const list = ingredientList(outcome.value, {
-		market: 'EU',
+		...wanted,
 		stay: product.stay,
 		batchDay,
 		substances: loaded.substances,
-		allergens: EU_ALLERGENS
+		allergens: ALLERGENS[wanted.market],
+		names: NAME_BOOK
 	});
-	return { kind: 'reading', basis, tree, loaded, substances: loaded.substances, composition: outcome.value, list };
+	return {
+		kind: 'reading',
+		basis,
+		tree,
+		loaded,
+		substances: loaded.substances,
+		composition: outcome.value,
+		list,
+		arranged: wanted.arrangement !== undefined
+	};
 }
 
 const materialIdsOf = (tree: Tree): string[] => [

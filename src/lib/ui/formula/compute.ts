@@ -1,7 +1,13 @@
 import { compose } from '$lib/domain/composition/compose';
 import type { Composition, FormulaLine } from '$lib/domain/composition/types';
 import { ingredientList } from '$lib/domain/ingredients/list';
-import type { AllergenEntry, IngredientList, Stay, SubstanceIdentity } from '$lib/domain/ingredients/types';
+import {
+	GLOSSARY_ONLY,
+	type AllergenEntry,
+	type IngredientList,
+	type Stay,
+	type SubstanceIdentity
+} from '$lib/domain/ingredients/types';
 import type { Constituent, MaterialVersion } from '$lib/domain/material/types';
 import { decimalOf, formatExact, parseDecimal } from '$lib/domain/quantity/decimal';
 import {
@@ -123,7 +129,7 @@ export function computeLines(
 	return {
 		composition: outcome.value,
 		substances,
-		list: ingredientList(outcome.value, { market: 'EU', substances, ...use })
+		list: ingredientList(outcome.value, { market: 'EU', substances, names: GLOSSARY_ONLY, ...use })
 	};
 }
 

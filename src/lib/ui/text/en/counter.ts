@@ -48,7 +48,8 @@ export const counter = {
 	firstCopy: 'This is the first copy of this pack.',
 	effect: {
 		formula: (day: string) => `A new version of the formula, ${day}, changed the list:`,
-		material: (day: string) => `New data of a raw material, ${day}, changed the list:`
+		material: (day: string) => `New data of a raw material, ${day}, changed the list:`,
+		product: (day: string) => `The laboratory set the list anew, ${day}:`
 	},
 	untouched: (day: string) => `A release of ${day} left the text as it was.`,
 	nothingChanged: 'Nothing.',

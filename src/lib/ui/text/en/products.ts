@@ -40,9 +40,20 @@ export const products = {
 	packLine: (client: string, size: string, unit: string) => `${client} · ${size} ${unit}`
 };
 
+const markets = {
+	EU: 'the EU',
+	GB: 'the UK (GB)',
+	US: 'the United States',
+	CA: 'Canada',
+	AU: 'Australia',
+	ASEAN: 'ASEAN',
+	CH: 'Switzerland'
+} as const;
+
 const leftOut = {
 	impurity: () => 'an impurity is no ingredient',
 	processingAid: () => 'a technical aid that is not left in the product is no ingredient',
+	carryOver: () => 'carried over, and justified to have no function in the product',
 	allergenAtOrBelow: (limit: string | null) => `stays at or below ${limit} % and is not named`,
 	allergenNotYet: () => 'need not be named for a batch of this day',
 	namedByPerfume: () => 'part of a constituent that is named'
@@ -50,10 +61,13 @@ const leftOut = {
 
 export const list = {
 	title: 'Ingredient list',
-	sentence: (names: number, weak: number) =>
+	markets,
+	marketShort: { EU: 'EU', GB: 'UK (GB)', US: 'US', CA: 'Canada', AU: 'Australia', ASEAN: 'ASEAN', CH: 'Switzerland' },
+	market: 'Market',
+	sentence: (names: number, market: string, weak: number) =>
 		weak === 0
-			? `${names} names for the EU. Every place is certain.`
-			: `${names} names for the EU. The order of ${weak} ${weak === 1 ? 'pair' : 'pairs'} depends on a supplier’s range, so the list cannot be approved.`,
+			? `${names} names for ${market}. Every place is certain.`
+			: `${names} names for ${market}. The order of ${weak} ${weak === 1 ? 'pair' : 'pairs'} depends on a supplier’s range, so the list cannot be approved.`,
 	running: (formula: string, number: number, day: string, ruleBook: string) =>
 		`${formula}, version ${number}, released ${day} · rule book ${ruleBook}`,
 	nothingReleased: 'The formula has no released version yet. Release one, and the list stands here.',
@@ -71,7 +85,8 @@ export const list = {
 		colourant: 'colourant'
 	},
 	allergen: 'allergen',
-	belowOne: 'Below 1 %: any order is lawful.',
+	belowOne: (atOrBelow: boolean) =>
+		atOrBelow ? 'At or below 1 %: any order is lawful.' : 'Below 1 %: any order is lawful.',
 	printed: 'As it will be printed',
 	copy: 'Copy text',
 	copied: 'Copied.',
@@ -85,12 +100,39 @@ export const list = {
 	questionsTitle: 'Cannot be told yet',
 	question: (name: string, low: string, high: string, limit: string) =>
 		`${name}: ${low} to ${high} % lies on both sides of ${limit} %.`,
+	colourQuestion: (name: string, candidates: readonly string[]) =>
+		candidates.length > 0
+			? `${name}: the salt decides between ${candidates.join(' and ')}; write it into the constituent’s name, as in “CI 45410 (Na)”.`
+			: `${name}: this market lists no such colour in this rule book.`,
+	arrange: {
+		start: 'Arrange',
+		reset: 'Usual order',
+		how: 'Drag a name, or use its arrows. A move that a supplier’s range could make unlawful is refused.',
+		up: (name: string) => `Move ${name} up`,
+		down: (name: string) => `Move ${name} down`,
+		refused: (name: string, before: string) => `${name} cannot stand before ${before}.`,
+		dropped: (name: string, before: string) => `The arrangement put ${name} before ${before}; this was dropped.`,
+		turns: (inci: string, percent: string, material: string) =>
+			`At ${percent} % ${inci} in ${material} that order would be unlawful.`,
+		because: {
+			weight: 'The second weighs more, in the part that is ordered by weight.',
+			colourantLast: 'Colourants stand behind.',
+			mayContainLast: 'What only some shades hold stands behind everything.'
+		},
+		failed: 'The order was not saved. Try again.'
+	},
+	carryOver: {
+		leaveOut: (material: string) => `Carried over by ${material}: leave it out`,
+		reason: 'Why it has no function in the finished product',
+		hint: 'Kept with your name; the substance stays in every rule and safety reading.',
+		confirm: 'Leave it out of the list'
+	},
 	downloads: { text: 'Text', json: 'JSON' },
 	caution: 'It computes and documents. The qualified assessor and the official text prevail.',
 	marginTitle: 'Why each name stands where it does',
 	marginHint: 'Choose a line with the pointer or the arrow keys; its reasons stand here.',
 	placeOf: (no: number, all: number) => `No ${no} of ${all}`,
-	nth: (no: number) => `Name ${no} of the EU list`,
+	nth: (no: number, market: string) => `Name ${no} of the list for ${market}`,
 	trail: {
 		printed: 'Printed line',
 		weighed: 'Weighed',

@@ -1,15 +1,16 @@
 import { signedIn } from '$lib/server/http/signed-in';
-import { batchDayOf } from '$lib/server/http/batch-day';
+import { batchDayOf, marketOf } from '$lib/server/http/batch-day';
 import { readProductList } from '$lib/server/services/product-list';
 import type { RequestHandler } from './$types';
 
 export const GET: RequestHandler = ({ locals, params, url }) =>
 	signedIn(locals, async (actor) => {
-		const { product, list } = await readProductList(actor, params.slug, batchDayOf(url));
+		const market = marketOf(url);
+		const { product, list } = await readProductList(actor, params.slug, batchDayOf(url), market);
 		return new Response(`${list?.text ?? ''}\n`, {
 			headers: {
 				'content-type': 'text/plain; charset=utf-8',
-				'content-disposition': `attachment; filename="${product.slug}-list-eu.txt"`
+				'content-disposition': `attachment; filename="${product.slug}-list-${market.toLowerCase()}.txt"`
 			}
 		});
 	});

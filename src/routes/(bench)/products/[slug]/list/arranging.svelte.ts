@@ -1,0 +1,54 @@
+import { deserialize } from '$app/forms';
+import { invalidateAll } from '$app/navigation';
+import type { ActionResult } from '@sveltejs/kit';
+import type { RefusalView } from '$lib/schemas/list-view';
+
+/** Names moved one at a time: each move is judged by the server at once, and taken back when it is unlawful. */
+export class Arranging {
+	on = $state(false);
+	busy = $state(false);
+	refusals = $state.raw<readonly RefusalView[]>([]);
+	/** A refusal that no place of the list explains. */
+	failed = $state(false);
+
+	constructor(
+		private readonly market: () => string,
+		private readonly names: () => readonly string[]
+	) {}
+
+	/** Puts a name before the one that stands at `to`; beyond the end it becomes the last. */
+	move(name: string, to: number): Promise<void> {
+		const names = this.names();
+		const from = names.indexOf(name);
+		if (from < 0 || to < 0 || to > names.length || to === from || to === from + 1) return Promise.resolve();
+		const others = names.filter((each) => each !== name);
+		others.splice(to > from ? to - 1 : to, 0, name);
+		return this.#send(others);
+	}
+
+	/** Takes the usual order back. */
+	reset = (): Promise<void> => this.#send([]);
+
+	async #send(names: readonly string[]): Promise<void> {
+		this.busy = true;
+		this.failed = false;
+		const body = new FormData();
+		body.set('payload', JSON.stringify({ market: this.market(), names }));
+		try {
+			const response = await fetch('?/arrange', { method: 'POST', body, headers: { 'x-sveltekit-action': 'true' } });
+			const result: ActionResult = deserialize(await response.text());
+			this.refusals = result.type === 'failure' ? refusalsIn(result.data) : [];
+			this.failed = result.type === 'error' || (result.type === 'failure' && this.refusals.length === 0);
+			await invalidateAll();
+		} catch {
+			this.failed = true;
+		} finally {
+			this.busy = false;
+		}
+	}
+}
+
+function refusalsIn(data: Record<string, unknown> | undefined): readonly RefusalView[] {
+	const refused = data?.['refused'] as { data?: { refusals?: readonly RefusalView[] } } | undefined;
+	return refused?.data?.refusals ?? [];
+}

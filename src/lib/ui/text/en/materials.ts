@@ -9,6 +9,16 @@ const roles = {
 	ofWhich: 'of which'
 };
 
+const fieldNames: Readonly<Record<string, string>> = {
+	inci: 'constituent',
+	cas: 'CAS number',
+	ec: 'EC number',
+	min: 'min',
+	typical: 'typical',
+	max: 'max',
+	page: 'page'
+};
+
 const figureFaults: Record<DecimalFault | 'openMinimum', (value: string, limit: string | null) => string> = {
 	empty: () => 'The figure is missing.',
 	notANumber: (value) => `“${value}” is no number.`,
@@ -145,7 +155,7 @@ export const materials = {
 		if (why === 'parentMissing') return 'Choose the constituent that it is part of.';
 		return `“${value}” cannot be taken.`;
 	},
-	faultAt: (row: number, field: string, sentence: string) => `Row ${row}, ${field}: ${sentence}`,
+	faultAt: (row: number, field: string, sentence: string) => `Row ${row}, ${fieldNames[field] ?? field}: ${sentence}`,
 	conflict: 'Somebody saved this draft in between. Their figures stand beside yours; choose which to keep.',
 	theirs: 'Saved by somebody else',
 	yours: 'Yours, not saved',

@@ -1,38 +1,49 @@
-/** Invented formulas; "rest" is the q.s. line. */
+/** Invented formulas; "rest" is the q.s. line, and a code that is a formula's own is a bulk. */
 export interface DemoFormula {
 	readonly code: string;
 	readonly name: string;
-	readonly lines: readonly (readonly [phase: string, material: string, percent: string | 'rest'])[];
+	readonly lines: readonly (readonly [phase: string, code: string, percent: string | 'rest'])[];
 }
 
-const baseLines = (percents: { readonly oil: string; readonly shea: string }) =>
-	[
-		['A', 'WATER', 'rest'],
-		['A', 'GLY-995', '4.00'],
-		['A', 'XT-20', '0.25'],
-		['B', 'OL-CT60', percents.oil],
-		['B', 'GMS-SE', '3.00'],
-		['B', 'OL-KS', percents.shea],
-		['C', 'WD-90', '1.00'],
-		['C', 'TV-70', '0.30']
-	] as const;
-
 export const DEMO_FORMULAS: readonly DemoFormula[] = [
-	{ code: 'F-0001', name: 'Base lotion', lines: baseLines({ oil: '7.00', shea: '2.00' }) },
+	{
+		code: 'F-0001',
+		name: 'Base lotion',
+		lines: [
+			['A', 'WATER', 'rest'],
+			['A', 'GLY-995', '4.00'],
+			['A', 'XT-20', '0.25'],
+			['B', 'OL-CT60', '7.00'],
+			['B', 'GMS-SE', '3.00'],
+			['B', 'OL-KS', '2.00'],
+			['C', 'WD-90', '1.00'],
+			['C', 'TV-70', '0.30']
+		]
+	},
 	{
 		code: 'F-0002',
 		name: 'Lotion with oat',
-		lines: [...baseLines({ oil: '6.50', shea: '2.00' }), ['C', 'OAT-1', '3.00']]
+		lines: [
+			['A', 'F-0001', 'rest'],
+			['B', 'OAT-1', '3.00']
+		]
 	},
 	{
 		code: 'F-0003',
 		name: 'Lotion with camomile',
-		lines: [...baseLines({ oil: '6.50', shea: '1.80' }), ['C', 'CHM-1', '3.00']]
+		lines: [
+			['A', 'F-0001', 'rest'],
+			['B', 'CHM-1', '3.00'],
+			['B', 'OL-CT60', '4.00']
+		]
 	},
 	{
 		code: 'F-0004',
 		name: 'Lotion, perfumed',
-		lines: [...baseLines({ oil: '7.00', shea: '2.00' }), ['C', 'MR-4417', '0.30']]
+		lines: [
+			['A', 'F-0001', 'rest'],
+			['B', 'MR-4417', '0.30']
+		]
 	},
 	{
 		code: 'F-0012',

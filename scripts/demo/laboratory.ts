@@ -46,6 +46,8 @@ export async function seedMaterials(formulator: Actor): Promise<void> {
 	}
 }
 
+const FORMULA_CODES = new Set(DEMO_FORMULAS.map(({ code }) => code));
+
 export async function seedFormulas(formulator: Actor): Promise<void> {
 	for (const { code, name, lines } of DEMO_FORMULAS) {
 		await createFormula(formulator, { code, name });
@@ -54,7 +56,11 @@ export async function seedFormulas(formulator: Actor): Promise<void> {
 			lines: lines.map(([phase, material, percent]) => ({
 				id: newId<'line'>(),
 				phase,
-				kind: 'material',
+				kind: FORMULA_CODES.has(material) ? 'formula' : 'material',
+				min: '',
+				max: '',
+				pinned: null,
+				pinReason: '',
 				code: material,
 				percent: percent === 'rest' ? '' : percent,
 				qs: percent === 'rest'

@@ -83,6 +83,7 @@ test('two materials, one formula and one product give a list', async ({ page }) 
 	await page.getByRole('button', { name: 'Save the draft' }).click();
 	await expect(page.getByText('Saved.')).toBeVisible();
 	await page.getByRole('button', { name: 'Release formula 1' }).click();
+	await page.getByRole('button', { name: 'Release 1', exact: true }).click();
 	await expect(page.getByRole('heading', { level: 1 })).toContainText('version 1');
 
 	await open(page, '/products/new');

@@ -12,6 +12,7 @@ test('the formulator changes a weight; list and margin of the product move', asy
 	await page.getByRole('button', { name: 'Save the draft' }).click();
 	await expect(page.getByText('Saved.')).toBeVisible();
 	await page.getByRole('button', { name: 'Release formula 2' }).click();
+	await page.getByRole('button', { name: 'Release 2', exact: true }).click();
 	await expect(page.getByRole('heading', { level: 1 })).toContainText('version 2');
 
 	await open(page, '/products/nightfold-cream/list');

@@ -161,10 +161,28 @@ export const ACCESS: readonly AccessRow[] = [
 
 	{ route: '/(bench)/formulas', call: 'GET', address: '/formulas', answers: STAFF },
 	{
-		route: '/(bench)/formulas/materials.json',
+		route: '/(bench)/formulas/lines.json',
 		call: 'GET',
-		address: '/formulas/materials.json?q=aqua',
+		address: '/formulas/lines.json?q=aqua',
 		answers: STAFF
+	},
+	{
+		route: '/(bench)/formulas/bulk.json',
+		call: 'GET',
+		address: '/formulas/bulk.json?code=F-0012',
+		answers: STAFF
+	},
+	{
+		route: '/(bench)/formulas/[code]/family',
+		call: 'GET',
+		address: '/formulas/F-0001/family',
+		answers: STAFF
+	},
+	{
+		route: '/(bench)/formulas/[code]/impact.json',
+		call: 'GET',
+		address: '/formulas/NO-SUCH/impact.json',
+		answers: [404, 404, 403, 403, 404, 303]
 	},
 	{ route: '/(bench)/formulas/new', call: 'GET', address: '/formulas/new', answers: [200, 200, 403, 403, 404, 303] },
 	{

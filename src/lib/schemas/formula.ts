@@ -21,14 +21,27 @@ const share = z
 		if (!parsed.ok) ctx.addIssue({ code: 'custom', message: parsed.why, params: { limit: parsed.limit } });
 	});
 
-export const formulaLineSchema = z.object({
-	id: z.uuid(),
-	phase: z.string().trim().min(1).max(8).default('A'),
-	kind: z.enum(['material', 'formula']),
-	code: z.string().trim().min(1).max(32),
-	percent: share,
-	qs: z.boolean().default(false)
-});
+export const formulaLineSchema = z
+	.object({
+		id: z.uuid(),
+		phase: z.string().trim().min(1).max(8).default('A'),
+		kind: z.enum(['material', 'formula']),
+		code: z.string().trim().min(1).max(32),
+		percent: share,
+		/** The lowest and highest amount of an adjuster; empty where it has none. */
+		min: share,
+		max: share,
+		qs: z.boolean().default(false),
+		/** The version of a bulk that answers whatever is released later; null follows the newest one. */
+		pinned: z.number().int().positive().nullable().default(null),
+		pinReason: z.string().trim().max(500).default('')
+	})
+	.superRefine((line, ctx) => {
+		const issue = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });
+		if (line.pinned !== null && line.kind !== 'formula') issue('pinned', 'pinnedMaterial');
+		if (line.pinned !== null && line.pinReason === '') issue('pinReason', 'pinReasonMissing');
+		if (line.qs && (line.min !== '' || line.max !== '')) issue('min', 'rangeOnQs');
+	});
 export type FormulaLineInput = z.infer<typeof formulaLineSchema>;
 
 export const MOST_LINES = 500;

@@ -33,7 +33,32 @@ export interface LineView {
 	readonly code: string;
 	readonly name: string;
 	readonly percent: string;
+	/** Of an adjuster; empty where the amount is one figure. */
+	readonly min: string;
+	readonly max: string;
 	readonly qs: boolean;
+	/** The bulk's version that answers whatever is released later; null follows the newest. */
+	readonly pinned: number | null;
+	readonly pinReason: string;
 }
+/** A bulk in the tree of a formula, with the lines of the version that answers for it. */
+export interface BulkView {
+	readonly id: string;
+	readonly code: string;
+	readonly name: string;
+	readonly number: number;
+	/** Every released version, newest first. */
+	readonly released: readonly number[];
+	readonly lines: readonly LineView[];
+}
+/** A bulk with everything below it. */
+export interface BulkTree {
+	readonly bulks: readonly BulkView[];
+	readonly materials: readonly MaterialView[];
+}
+/** What can become a line. */
+export type Suggestion =
+	| { readonly kind: 'material'; readonly material: MaterialView }
+	| { readonly kind: 'formula'; readonly code: string; readonly name: string; readonly number: number };
 /** A line in the hands of the person who edits it. */
 export type EditedLine = { -readonly [Key in keyof LineView]: LineView[Key] };

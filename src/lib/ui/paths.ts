@@ -48,6 +48,10 @@ export const paths = {
 
 	formulas: (query?: Query) => withQuery('/formulas', query),
 	newFormula: () => '/formulas/new',
+	formulaLines: (q: string, forCode: string) => withQuery('/formulas/lines.json', { q, for: forCode }),
+	bulk: (code: string, version: number | null) => withQuery('/formulas/bulk.json', { code, version }),
+	impact: (code: string) => `/formulas/${part(code)}/impact.json`,
+	family: (code: string) => `/formulas/${part(code)}/family`,
 	formula: (code: string, query?: Query) => withQuery(`/formulas/${part(code)}`, query),
 	formulaVersion: (code: string, version: string | number, query?: Query) =>
 		withQuery(`/formulas/${part(code)}/${part(version)}`, query),

@@ -74,8 +74,11 @@ export interface Tree {
 	readonly formulas: ReadonlyMap<Id<'formula'>, FormulaVersionLines>;
 }
 
-/** The formula version and every bulk below it, each by the version that answers for it. */
-export async function loadTree(trx: Trx, root: FormulaVersionRef): Promise<Tree> {
+/**
+ * The formula version and every bulk below it, each by the version that answers for it. `instead` answers for its formula
+ * wherever the newest version would, as if it were released.
+ */
+export async function loadTree(trx: Trx, root: FormulaVersionRef, instead?: FormulaVersionRef): Promise<Tree> {
 	const versions = new Map<string, FormulaVersionRef>([[root.formulaId, root]]);
 	const formulas = new Map<Id<'formula'>, FormulaVersionLines>();
 	let pending: readonly FormulaVersionRef[] = [root];
@@ -97,7 +100,8 @@ export async function loadTree(trx: Trx, root: FormulaVersionRef): Promise<Tree>
 		const next: FormulaVersionRef[] = [];
 		for (const [formulaId, pinned] of bulks) {
 			if (versions.has(formulaId)) continue;
-			const version = await answeringFormulaVersion(trx, formulaId, pinned);
+			const stands = pinned === null && instead?.formulaId === formulaId ? instead : null;
+			const version = stands ?? (await answeringFormulaVersion(trx, formulaId, pinned));
 			if (!version) continue;
 			versions.set(formulaId, version);
 			next.push(version);

@@ -82,12 +82,19 @@ export async function lockFormulaDraft(trx: Trx, formulaId: string, number: numb
 	return row;
 }
 
+const plain = (share: string | null) => (share === null ? '' : share.replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, ''));
+
 export async function linesOfVersion(trx: Trx, versionId: string): Promise<LineView[]> {
 	const rows = await trx
 		.selectFrom('formula_line')
 		.leftJoin('material', 'material.id', 'formula_line.material_id')
 		.leftJoin('formula', 'formula.id', 'formula_line.formula_id')
+		.leftJoin('formula_version as pin', 'pin.id', 'formula_line.pinned_version_id')
 		.select([
+			'formula_line.share_min',
+			'formula_line.share_max',
+			'formula_line.pin_reason',
+			'pin.number as pinned',
 			'formula_line.id',
 			'formula_line.phase',
 			'formula_line.share',
@@ -97,8 +104,8 @@ export async function linesOfVersion(trx: Trx, versionId: string): Promise<LineV
 			'formula.code as formulaCode',
 			'formula.name as formulaName'
 		])
-		.where('formula_version_id', '=', versionId)
-		.orderBy('position')
+		.where('formula_line.formula_version_id', '=', versionId)
+		.orderBy('formula_line.position')
 		.execute();
 	return rows.map((row) => ({
 		id: row.id,
@@ -106,8 +113,12 @@ export async function linesOfVersion(trx: Trx, versionId: string): Promise<LineV
 		kind: row.materialCode === null ? 'formula' : 'material',
 		code: row.materialCode ?? row.formulaCode ?? '',
 		name: row.materialName ?? row.formulaName ?? '',
-		percent: row.share === null ? '' : row.share.replace(/\.?0+$/, ''),
-		qs: row.is_qs
+		percent: plain(row.share),
+		min: plain(row.share_min),
+		max: plain(row.share_max),
+		qs: row.is_qs,
+		pinned: row.pinned,
+		pinReason: row.pin_reason ?? ''
 	}));
 }
 
@@ -125,6 +136,21 @@ export async function findMaterials(
 					join substance s on s.id = c.substance_id
 				where v.material_id = m.id and s.inci ilike ${pattern}))
 		order by (m.code = upper(${text})) desc, m.trade_name limit 12`.execute(trx);
+	return rows;
+}
+
+/** Formulas with a released version, by code or name; never the one that is being written. */
+export async function findBulks(
+	trx: Trx,
+	text: string,
+	exceptCode: string
+): Promise<{ readonly code: string; readonly name: string; readonly number: number }[]> {
+	const pattern = `%${text.replace(/[\\%_]/g, '\\$&')}%`;
+	const { rows } = await sql<{ code: string; name: string; number: number }>`
+		select f.code, f.name, max(v.number) as number
+		from formula f join formula_version v on v.formula_id = f.id and v.state = 'released'
+		where f.code || ' ' || f.name ilike ${pattern} and f.code <> ${exceptCode}
+		group by f.id order by (f.code = upper(${text})) desc, f.name limit 6`.execute(trx);
 	return rows;
 }
 

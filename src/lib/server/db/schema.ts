@@ -216,6 +216,19 @@ interface FormulaLineTable {
 	share: NullableNumeric;
 	share_max: NullableNumeric;
 	is_qs: Generated<boolean>;
+	pin_reason: string | null;
+}
+interface TrialTable extends Made {
+	id: string;
+	formula_id: string;
+	number: number;
+	lines: Json<readonly object[]>;
+	made_on: Day;
+	ph: NullableNumeric;
+	viscosity: NullableNumeric;
+	verdict: 'good' | 'nearly' | 'no';
+	remark: Generated<string>;
+	picture_id: string | null;
 }
 interface ProductTable extends Made {
 	id: string;
@@ -436,6 +449,7 @@ export interface Database {
 	formula: FormulaTable;
 	formula_version: FormulaVersionTable;
 	formula_line: FormulaLineTable;
+	trial: TrialTable;
 	product: ProductTable;
 	product_formula: ProductFormulaTable;
 	product_market: ProductMarketTable;

@@ -127,7 +127,7 @@ describe('lists of several markets', () => {
 	test('an arrangement is kept where it is lawful', () => {
 		const { lists } = computeLists(input({ formulas: fixed, arrangement: { EU: names } }));
 		expect(lists).toMatchObject({ EU: { text: names.join(', ') } });
-		expect(lists.EU).not.toHaveProperty('refused');
+		expect(JSON.stringify(lists)).not.toContain('refused');
 	});
 	test('and refused with the pair where it is not', () => {
 		const wrong = ['Aqua', 'Glycerin', 'Sodium Chloride', ...names.slice(3)];

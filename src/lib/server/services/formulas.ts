@@ -1,18 +1,20 @@
 import { compose } from '$lib/domain/composition/compose';
 import type { CompositionFault } from '$lib/domain/composition/types';
-import type { AllergenEntry } from '$lib/domain/ingredients/types';
+import type { AllergenEntry, Market, NameBook } from '$lib/domain/ingredients/types';
 import { formatExact } from '$lib/domain/quantity/decimal';
 import { LINE_DECIMALS, type Id, type IsoDate } from '$lib/domain/quantity/units';
-import { EU_ALLERGENS } from '$lib/reference';
+import { ALLERGENS, NAME_BOOK } from '$lib/reference';
 import { readShare, type FormulaDraft, type NewFormula } from '$lib/schemas/formula';
-import type { LineView, MaterialView } from '$lib/schemas/grid-view';
+import type { BulkTree, LineView, MaterialView, Suggestion } from '$lib/schemas/grid-view';
 import type { ListQuery, Page } from '$lib/schemas/paging';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
 import { today } from '../clock';
-import { constituentsOf, loadMaterials, loadTree, type Tree } from '../db/basis';
+import { loadMaterials, loadTree, type Tree } from '../db/basis';
+import { familyOf } from '../db/families';
 import {
+	findBulks,
 	findMaterials,
 	formulaByCode,
 	linesOfVersion,
@@ -28,6 +30,7 @@ import { newId } from '../db/id';
 import { withActor, type Trx } from '../db/with-actor';
 import { contentHash } from '../hash';
 import { Refused } from '../refused';
+import { bulkTree, materialViews, treeBelow } from './formula-tree';
 import { moveProducts, type CopyEffect } from './moves';
 
 export function readFormulas(actor: Actor, query: ListQuery): Promise<Page<FormulaListRow>> {
@@ -70,10 +73,15 @@ export interface FormulaView {
 	/** The newest released version's lines, for a draft to be compared with. */
 	readonly before: { readonly number: number; readonly lines: readonly LineView[] } | null;
 	readonly materials: readonly MaterialView[];
+	/** Every bulk of the tree. */
+	readonly bulks: BulkTree['bulks'];
+	/** Formulas that take this one in as a bulk. */
+	readonly variants: readonly { readonly code: string; readonly name: string }[];
 	readonly products: Awaited<ReturnType<typeof productsOfFormula>>;
 	readonly batchDay: IsoDate;
-	/** For the list that the grid computes in the browser. */
-	readonly allergens: readonly AllergenEntry[];
+	/** For the lists that the grid computes in the browser. */
+	readonly allergens: Readonly<Record<Market, readonly AllergenEntry[]>>;
+	readonly names: NameBook;
 }
 
 export function readFormula(actor: Actor, code: string, number: number | null): Promise<FormulaView> {
@@ -86,25 +94,25 @@ export function readFormula(actor: Actor, code: string, number: number | null): 
 		const lines = await linesOfVersion(trx, version.id);
 		const released = versions.find((each) => each.state === 'released' && each.number < version.number);
 		const before = released ? { number: released.number, lines: await linesOfVersion(trx, released.id) } : null;
-		const codes = [
-			...new Set([...lines, ...(before?.lines ?? [])].flatMap((line) => (line.kind === 'material' ? line.code : [])))
-		];
+		const tree = await treeBelow(trx, [...lines, ...(before?.lines ?? [])]);
 		return {
 			formula,
 			versions,
 			version,
 			lines,
 			before,
-			materials: await materialViews(trx, codes),
+			...tree,
+			variants: (await familyOf(trx, formula.id)).map(({ code, name }) => ({ code, name })),
 			products: await productsOfFormula(trx, formula.id),
 			batchDay: today(),
-			allergens: EU_ALLERGENS
+			allergens: ALLERGENS,
+			names: NAME_BOOK
 		};
 	});
 }
 
-/** What the grid offers for a typed name, code or INCI. */
-export function suggestMaterials(actor: Actor, text: string): Promise<readonly MaterialView[]> {
+/** What the grid offers for a typed name, code or INCI: materials, and formulas that can be a bulk of this one. */
+export function suggestLines(actor: Actor, text: string, forCode: string): Promise<readonly Suggestion[]> {
 	requireAct(actor, 'readLaboratory');
 	return withActor(actor, async (trx) => {
 		const found = await findMaterials(trx, text);
@@ -112,55 +120,19 @@ export function suggestMaterials(actor: Actor, text: string): Promise<readonly M
 			trx,
 			found.map((material) => material.code)
 		);
-		return found.flatMap(({ code }) => views.find((view) => view.code === code) ?? []);
+		const materials = found.flatMap(({ code }) => views.find((view) => view.code === code) ?? []);
+		const bulks = await findBulks(trx, text, forCode);
+		return [
+			...materials.map((material) => ({ kind: 'material', material }) as const),
+			...bulks.map((bulk) => ({ kind: 'formula', ...bulk }) as const)
+		];
 	});
 }
 
-async function materialViews(trx: Trx, codes: readonly string[]): Promise<MaterialView[]> {
-	if (codes.length === 0) return [];
-	const ids = await trx
-		.selectFrom('material')
-		.select('id')
-		.where('code', 'in', [...codes])
-		.execute();
-	const { refs } = await loadMaterials(
-		trx,
-		ids.map((row) => row.id),
-		today()
-	);
-	const rows = await constituentsOf(
-		trx,
-		[...refs.values()].map((ref) => ref.versionId)
-	);
-	return [...refs.values()].map((ref) => {
-		const own = rows.filter((row) => row.material_version_id === ref.versionId);
-		return {
-			id: ref.materialId,
-			versionId: ref.versionId,
-			code: ref.code,
-			name: ref.tradeName,
-			supplier: ref.supplier,
-			number: ref.number,
-			documented: own.filter((row) => row.source_document_id !== null).length,
-			constituents: own.map((row) => ({
-				id: row.id,
-				substance: row.substance_id,
-				inci: row.inci,
-				key: row.name_key,
-				cas: row.substance_cas,
-				colourIndex: row.colour_index,
-				place: row.place,
-				role: row.role,
-				parent: row.parent_id,
-				use: row.use,
-				nano: row.nano,
-				low: row.low,
-				typical: row.typical,
-				high: row.high,
-				highOpen: row.high_open
-			}))
-		};
-	});
+/** A bulk with everything below it, by the version named or the newest one. @throws Refused 'not-found'. */
+export function readBulk(actor: Actor, code: string, number: number | null): Promise<BulkTree> {
+	requireAct(actor, 'readLaboratory');
+	return withActor(actor, (trx) => bulkTree(trx, code, number));
 }
 
 /** Opens the next draft with the lines of the newest version. @throws Refused 'exists' when a draft is open. */
@@ -222,12 +194,17 @@ async function insertLines(trx: Trx, versionId: string, { lines }: FormulaDraft)
 		const known = (line.kind === 'material' ? materials : formulas).has(line.code);
 		return known ? [] : [{ path: `lines.${index}.code`, value: line.code, why: 'unknownCode', limit: null }];
 	});
-	if (unknown.length > 0) throw new Refused('invalid', { faults: unknown });
+	const pins = await pinnedVersions(trx, lines, formulas);
+	const unpinned = lines.flatMap((line, index) =>
+		line.pinned === null || pins.has(pinKey(line))
+			? []
+			: [{ path: `lines.${index}.pinned`, value: String(line.pinned), why: 'unknownVersion', limit: null }]
+	);
+	if (unknown.length + unpinned.length > 0) throw new Refused('invalid', { faults: [...unknown, ...unpinned] });
 	await trx
 		.insertInto('formula_line')
 		.values(
 			lines.map((line, position) => {
-				const share = readShare(line.percent);
 				return {
 					id: line.id,
 					formula_version_id: versionId,
@@ -235,12 +212,37 @@ async function insertLines(trx: Trx, versionId: string, { lines }: FormulaDraft)
 					phase: line.phase,
 					material_id: line.kind === 'material' ? (materials.get(line.code) ?? null) : null,
 					formula_id: line.kind === 'formula' ? (formulas.get(line.code) ?? null) : null,
-					share: line.qs || !share.ok ? null : formatExact(share.value, LINE_DECIMALS),
+					pinned_version_id: pins.get(pinKey(line)) ?? null,
+					pin_reason: line.pinned === null ? null : line.pinReason,
+					share_min: line.qs ? null : canonicalShare(line.min),
+					share: line.qs ? null : canonicalShare(line.percent),
+					share_max: line.qs ? null : canonicalShare(line.max),
 					is_qs: line.qs
 				};
 			})
 		)
 		.execute();
+}
+
+function canonicalShare(text: string): string | null {
+	const parsed = readShare(text);
+	return parsed.ok ? formatExact(parsed.value, LINE_DECIMALS) : null;
+}
+
+const pinKey = (line: Pick<FormulaDraft['lines'][number], 'code' | 'pinned'>) => `${line.code} ${line.pinned}`;
+
+/** The released versions that lines pin, by pinKey. */
+async function pinnedVersions(trx: Trx, lines: FormulaDraft['lines'], formulas: ReadonlyMap<string, string>) {
+	const found = new Map<string, string>();
+	for (const line of lines) {
+		const formulaId = formulas.get(line.code);
+		if (line.kind !== 'formula' || line.pinned === null || !formulaId) continue;
+		const version = (await versionsOfFormula(trx, formulaId)).find(
+			({ number, state }) => number === line.pinned && state === 'released'
+		);
+		if (version) found.set(pinKey(line), version.id);
+	}
+	return found;
 }
 
 async function idsByCode(trx: Trx, table: 'material' | 'formula', lines: FormulaDraft['lines']) {
@@ -297,7 +299,25 @@ async function faultsOf(trx: Trx, formulaId: string, tree: Tree) {
 	];
 	const { materials } = await loadMaterials(trx, ids, today());
 	const outcome = compose({ formula: formulaId as Id<'formula'>, formulas: tree.formulas, materials });
-	return outcome.ok ? [] : outcome.faults.map(plainFault);
+	if (outcome.ok) return [];
+	const codes = await codesOfFormulas(
+		trx,
+		outcome.faults.flatMap((fault) => (fault.kind === 'cycle' ? fault.path : []))
+	);
+	return outcome.faults.map((fault) => ({
+		...plainFault(fault),
+		path: fault.kind === 'cycle' ? fault.path.map((id) => codes.get(id) ?? '') : null
+	}));
+}
+
+async function codesOfFormulas(trx: Trx, ids: readonly string[]) {
+	if (ids.length === 0) return new Map<string, string>();
+	const rows = await trx
+		.selectFrom('formula')
+		.select(['id', 'code'])
+		.where('id', 'in', [...ids])
+		.execute();
+	return new Map(rows.map((row) => [row.id, row.code]));
 }
 
 const plainFault = (fault: CompositionFault) => ({

@@ -29,7 +29,8 @@ export interface CopyEffect {
 	readonly newText: string;
 }
 
-const LIVE: readonly CopyState[] = ['inReview', 'approvedByLaboratory', 'approvedByClient', 'inUse'];
+/** Copies whose text stands for something outside the laboratory. */
+export const LIVE_COPIES: readonly CopyState[] = ['inReview', 'approvedByLaboratory', 'approvedByClient', 'inUse'];
 
 /**
  * Carries a release to every product that it may touch, in the release's own transaction: raises what the product's statements
@@ -96,7 +97,7 @@ async function recordEffects(
 		.selectFrom('label_copy')
 		.select(['id', 'number', 'state', 'content', 'market'])
 		.where('product_id', '=', product.id)
-		.where('state', 'in', [...LIVE])
+		.where('state', 'in', [...LIVE_COPIES])
 		.orderBy('id')
 		.execute();
 	const newText = reading.kind === 'reading' ? reading.list.text : '';

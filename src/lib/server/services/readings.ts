@@ -50,12 +50,7 @@ export async function readProduct(
 	batchDay: IsoDate,
 	market: Market = 'EU'
 ): Promise<Reading> {
-	const { arrangement, leftOutCarryOver } = await listDecisions(trx, product.id, market);
-	return read(trx, product, batchDay, {
-		market,
-		leftOutCarryOver,
-		...(arrangement ? { arrangement, arrangementIs: 'kept' } : {})
-	});
+	return read(trx, product, batchDay, await wantedOf(trx, product, market));
 }
 
 /** As readProduct, with an order that somebody wishes in place of the kept one. */
@@ -72,10 +67,33 @@ export async function readArranged(
 
 type Wanted = Pick<ListRequest, 'market' | 'leftOutCarryOver' | 'arrangement' | 'arrangementIs'>;
 
-async function read(trx: Trx, product: ProductRow, batchDay: IsoDate, wanted: Wanted): Promise<Reading> {
-	const version = await answeringFormulaVersion(trx, product.formulaId, product.pinnedVersionId);
+/** As readProduct, as if this version of a formula were released already. */
+export async function readWith(
+	trx: Trx,
+	product: ProductRow,
+	batchDay: IsoDate,
+	market: Market,
+	instead: FormulaVersionRef
+): Promise<Reading> {
+	return read(trx, product, batchDay, await wantedOf(trx, product, market), instead);
+}
+
+async function wantedOf(trx: Trx, product: ProductRow, market: Market): Promise<Wanted> {
+	const { arrangement, leftOutCarryOver } = await listDecisions(trx, product.id, market);
+	return { market, leftOutCarryOver, ...(arrangement ? { arrangement, arrangementIs: 'kept' } : {}) };
+}
+
+async function read(
+	trx: Trx,
+	product: ProductRow,
+	batchDay: IsoDate,
+	wanted: Wanted,
+	instead?: FormulaVersionRef
+): Promise<Reading> {
+	const stands = instead?.formulaId === product.formulaId && product.pinnedVersionId === null ? instead : null;
+	const version = stands ?? (await answeringFormulaVersion(trx, product.formulaId, product.pinnedVersionId));
 	if (!version) return { kind: 'nothingReleased' };
-	const tree = await loadTree(trx, version);
+	const tree = await loadTree(trx, version, instead);
 	const loaded = await loadMaterials(trx, materialIdsOf(tree), batchDay);
 	const basis = basisOf(version, tree, loaded, batchDay);
 	const outcome = compose({

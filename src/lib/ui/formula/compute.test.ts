@@ -9,7 +9,11 @@ const line = (id: string, percent: string, more: Partial<LineView> = {}): LineVi
 	code: id.toUpperCase(),
 	name: id,
 	percent,
+	min: '',
+	max: '',
 	qs: false,
+	pinned: null,
+	pinReason: '',
 	...more
 });
 

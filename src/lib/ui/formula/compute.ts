@@ -1,12 +1,13 @@
 import { compose } from '$lib/domain/composition/compose';
-import type { Composition, FormulaLine } from '$lib/domain/composition/types';
+import type { Composition, CompositionFault, FormulaLine } from '$lib/domain/composition/types';
 import { ingredientList } from '$lib/domain/ingredients/list';
-import {
-	GLOSSARY_ONLY,
-	type AllergenEntry,
-	type IngredientList,
-	type Stay,
-	type SubstanceIdentity
+import type {
+	AllergenEntry,
+	IngredientList,
+	Market,
+	NameBook,
+	Stay,
+	SubstanceIdentity
 } from '$lib/domain/ingredients/types';
 import type { Constituent, MaterialVersion } from '$lib/domain/material/types';
 import { decimalOf, formatExact, parseDecimal } from '$lib/domain/quantity/decimal';
@@ -20,7 +21,7 @@ import {
 	type PartShare
 } from '$lib/domain/quantity/units';
 import { readShare } from '$lib/schemas/formula';
-import type { ConstituentView, LineView, MaterialView } from '$lib/schemas/grid-view';
+import type { BulkView, ConstituentView, LineView, MaterialView } from '$lib/schemas/grid-view';
 
 const part = (text: string | null) => (text === null ? null : (decimalOf(text, PART_DECIMALS) as PartShare));
 
@@ -85,34 +86,69 @@ export interface Computed {
 	readonly substances: ReadonlyMap<Id<'substance'>, SubstanceIdentity>;
 }
 
-/** Composition and EU list of the lines as they stand, in the browser; null while they do not make a whole. */
-export function computeLines(
-	lines: readonly LineView[],
-	materials: readonly MaterialView[],
-	use: { readonly stay: Stay; readonly batchDay: IsoDate; readonly allergens: readonly AllergenEntry[] }
-): Computed | null {
-	if (lines.some((line) => line.kind === 'formula')) return null;
-	const byCode = new Map(materials.map((material) => [material.code, material]));
-	const formulaLines: FormulaLine[] = [];
-	for (const line of lines) {
-		const material = byCode.get(line.code);
-		const weight = weightOf(line.percent);
-		if (!material || weight === null) return null;
-		formulaLines.push({
-			id: line.id as Id<'line'>,
-			phase: line.phase,
-			material: material.id as Id<'material'>,
-			amount: line.qs ? { kind: 'qs' } : { kind: 'share', min: null, share: weight, max: null }
-		});
-	}
-	const formula = 'draft' as Id<'formula'>;
-	const outcome = compose({
-		formula,
-		formulas: new Map([[formula, { formula, version: 'draft' as Id<'formulaVersion'>, lines: formulaLines }]]),
-		materials: new Map(materials.map((material) => [material.id as Id<'material'>, versionOf(material)]))
+/** What the lines name: materials, and bulks with what is below them. */
+export interface Known {
+	readonly materials: readonly MaterialView[];
+	readonly bulks: readonly BulkView[];
+}
+/** What a list is judged by, beside the lines. */
+export interface ListUse {
+	readonly market: Market;
+	readonly stay: Stay;
+	readonly batchDay: IsoDate;
+	readonly allergens: Readonly<Record<Market, readonly AllergenEntry[]>>;
+	readonly names: NameBook;
+}
+/** `faults` says why there is no composition; empty while a line cannot be read or names what is not known yet. */
+export interface Outcome {
+	readonly computed: Computed | null;
+	readonly faults: readonly CompositionFault[];
+}
+const NOTHING: Outcome = { computed: null, faults: [] };
+
+function linesOf(lines: readonly LineView[], { materials, bulks }: Known): readonly FormulaLine[] | null {
+	const found = lines.map((line): FormulaLine | null => {
+		const [min, share, max] = [weightOf(line.min), weightOf(line.percent), weightOf(line.max)];
+		if (min === null || share === null || max === null) return null;
+		const range = (text: string, weight: LineShare) => (text.trim() === '' ? null : weight);
+		const amount = line.qs
+			? ({ kind: 'qs' } as const)
+			: ({ kind: 'share', min: range(line.min, min), share, max: range(line.max, max) } as const);
+		const common = { id: line.id as Id<'line'>, phase: line.phase, amount };
+		const named = (line.kind === 'formula' ? bulks : materials).find(({ code }) => code === line.code);
+		if (!named) return null;
+		return line.kind === 'formula'
+			? { ...common, formula: named.id as Id<'formula'> }
+			: { ...common, material: named.id as Id<'material'> };
 	});
-	if (!outcome.ok) return null;
-	const substances = new Map(
+	return found.every((line) => line !== null) ? found : null;
+}
+
+/** Composition and one market's list of the lines as they stand, in the browser; null while they do not make a whole. */
+export function computeLines(lines: readonly LineView[], known: Known, formulaId: string, use: ListUse): Outcome {
+	const formula = formulaId as Id<'formula'>;
+	const own = linesOf(lines, known);
+	if (!own || own.length === 0) return NOTHING;
+	const formulas = new Map([[formula, { formula, version: 'draft' as Id<'formulaVersion'>, lines: own }]]);
+	for (const bulk of known.bulks) {
+		const below = linesOf(bulk.lines, known);
+		const id = bulk.id as Id<'formula'>;
+		if (below && id !== formula)
+			formulas.set(id, { formula: id, version: bulk.code as Id<'formulaVersion'>, lines: below });
+	}
+	const materials = new Map(known.materials.map((each) => [each.id as Id<'material'>, versionOf(each)]));
+	const outcome = compose({ formula, formulas, materials });
+	if (!outcome.ok) return { computed: null, faults: outcome.faults };
+	const substances = substancesOf(known.materials);
+	const request = { ...use, substances, allergens: use.allergens[use.market] };
+	return {
+		computed: { composition: outcome.value, substances, list: ingredientList(outcome.value, request) },
+		faults: []
+	};
+}
+
+const substancesOf = (materials: readonly MaterialView[]) =>
+	new Map(
 		materials.flatMap(({ constituents }) =>
 			constituents.map((view): [Id<'substance'>, SubstanceIdentity] => [
 				view.substance as Id<'substance'>,
@@ -126,12 +162,6 @@ export function computeLines(
 			])
 		)
 	);
-	return {
-		composition: outcome.value,
-		substances,
-		list: ingredientList(outcome.value, { market: 'EU', substances, names: GLOSSARY_ONLY, ...use })
-	};
-}
 
 /** One row of a pasted block: a code or name and an amount, in whichever order the spreadsheet has them. */
 export interface PastedRow {
@@ -159,7 +189,13 @@ export interface LineConflict {
 	readonly theirs: LineView | null;
 }
 const same = (a: LineView | undefined, b: LineView | undefined) =>
-	a?.percent === b?.percent && a?.qs === b?.qs && a?.phase === b?.phase && a?.code === b?.code;
+	a?.percent === b?.percent &&
+	a?.min === b?.min &&
+	a?.max === b?.max &&
+	a?.qs === b?.qs &&
+	a?.phase === b?.phase &&
+	a?.code === b?.code &&
+	a?.pinned === b?.pinned;
 
 /**
  * Joins two people's edits of the same lines, by line: what only one changed is taken, what both changed is a conflict that

@@ -48,11 +48,15 @@ export const formulas = {
 		contains: 'Contains',
 		phase: 'Phase',
 		percent: '% w/w',
+		least: 'least',
+		most: 'most',
 		qs: 'q.s.',
 		change: 'change',
 		grams: 'g',
 		documents: 'Documents'
 	},
+	ranges: 'Ranges of adjusters',
+	lineCount: (lines: number) => `${lines} ${lines === 1 ? 'line' : 'lines'}`,
 	qsTo100: 'q.s. to 100',
 	documented: (with_: number, all: number) => `${with_} of ${all}`,
 	total: 'Total',
@@ -81,6 +85,12 @@ export const formulas = {
 				return `The figure is longer than ${limit} signs.`;
 			case 'secondQs':
 				return 'There is a q.s. line already; a formula has one.';
+			case 'pinReasonMissing':
+				return 'Write why this version is pinned.';
+			case 'unknownVersion':
+				return `Version ${value} of this bulk is not released.`;
+			case 'rangeOnQs':
+				return 'A q.s. line has no range of its own.';
 			case 'unknownCode':
 				return `There is no material with the code “${value}”.`;
 			default:
@@ -93,11 +103,15 @@ export const formulas = {
 		sumBelow100: (by: string | null) => `The lines are together ${by} % below 100.`,
 		materialMissing: () => 'A material has no released version.',
 		formulaMissing: () => 'A bulk has no released version.',
-		cycle: () => 'A bulk contains this formula.',
+		cycle: (_by: string | null, path: readonly string[]) =>
+			path.length > 0 ? `A bulk contains this formula: ${path.join(' in ')}.` : 'A bulk contains this formula.',
+		rangeWithoutQs: () => 'A line with a range needs a q.s. line that gives way.',
+		rangeUpsideDown: () => 'The amount of a line lies outside its range.',
+		tooManyRanges: () => 'More than ten lines have a range.',
 		noLines: () => 'There is no line yet.',
 		severalQs: () => 'There is more than one q.s. line.',
 		material: () => 'A material contradicts itself.'
-	} as Readonly<Record<string, (by: string | null) => string>>,
+	} as Readonly<Record<string, (by: string | null, path: readonly string[]) => string>>,
 	conflict:
 		'Somebody saved this draft in between. Lines that only one of you changed are joined; for the others choose.',
 	theirs: 'Theirs',
@@ -109,12 +123,24 @@ export const formulas = {
 	changed: 'Composition, changed names',
 	unchanged: (count: number) => `${count} ${count === 1 ? 'name' : 'names'} unchanged.`,
 	noBefore: 'There is no released version to compare with.',
-	list: 'EU list of these lines',
+	list: (market: string) => `List of these lines for ${market}`,
+	bulk: (number: number) => `bulk, version ${number}`,
+	bulkTitle: 'Bulk',
+	pinned: 'pinned',
+	pinTo: (name: string) => `${name}, version that answers`,
+	follows: (number: number) => `follows, now ${number}`,
+	pinnedTo: (number: number) => `pinned to ${number}`,
+	pinReason: (name: string) => `${name}, why it is pinned`,
+	pinReasonHint: 'why pinned',
+	least: (name: string) => `${name}, least, % w/w`,
+	most: (name: string) => `${name}, most, % w/w`,
+	range: 'range',
 	listSame: 'The list prints the same names in the same order.',
 	notWhole: 'Composition and list appear when the lines make a whole of 100.',
 	weak: (count: number) => `${count} ${count === 1 ? 'place' : 'places'} in the order depend on a supplier’s range.`,
 	leaveOn: 'Allergens are judged for a leave-on product; each product judges for itself.',
 	weighed: 'Weighed',
+	variants: 'Formulas that take this one in',
 	usedIn: 'Products that refer to it',
 	usedInNone: 'No product refers to it yet.',
 	versionsTitle: 'Versions'

@@ -4,6 +4,7 @@ import { counter } from './counter';
 import { door } from './door';
 import { errors } from './errors';
 import { evidence } from './evidence';
+import { family, impact } from './family';
 import { file } from './file';
 import { formulas } from './formulas';
 import { label } from './label';
@@ -23,6 +24,8 @@ export const en = {
 	claims,
 	counter,
 	evidence,
+	family,
+	impact,
 	file,
 	formulas,
 	label,

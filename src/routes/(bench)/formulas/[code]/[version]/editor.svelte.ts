@@ -1,14 +1,23 @@
-import type { EditedLine, LineView, MaterialView } from '$lib/schemas/grid-view';
+import { paths } from '$lib/ui/paths';
+import type { BulkTree, BulkView, EditedLine, LineView, MaterialView, Suggestion } from '$lib/schemas/grid-view';
 import { mergeLines, type LineConflict, type PastedRow } from '$lib/ui/formula/compute';
 import { postJson, type JsonRefusal } from '$lib/ui/formula/post';
 
 type Saved = 'clean' | 'saving' | 'saved' | 'lost';
 const copyOf = (lines: readonly LineView[]): EditedLine[] => lines.map((line) => ({ ...line }));
 
+const PLAIN = { percent: '', min: '', max: '', qs: false, pinned: null, pinReason: '' } as const;
+
+async function bulkAt(code: string, version: number | null): Promise<BulkTree | null> {
+	const response = await fetch(paths.bulk(code, version));
+	return response.ok ? ((await response.json()) as BulkTree) : null;
+}
+
 /** One draft in the hands of one person: its lines, what was saved, and what stands in the way. */
 export class Editor {
 	lines = $state<EditedLine[]>([]);
 	materials = $state.raw<readonly MaterialView[]>([]);
+	bulks = $state.raw<readonly BulkView[]>([]);
 	faults = $state.raw<Readonly<Record<number, readonly [string, string, string | null]>>>({});
 	refusal = $state.raw<JsonRefusal | null>(null);
 	conflicts = $state.raw<readonly LineConflict[]>([]);
@@ -19,12 +28,17 @@ export class Editor {
 	#history: EditedLine[][] = [];
 	readonly #key: string;
 
-	constructor(versionId: string, rev: number, lines: readonly LineView[], materials: readonly MaterialView[]) {
-		this.#key = `costmary:formula:${versionId}`;
-		this.rev = rev;
+	constructor(
+		private readonly code: string,
+		version: { readonly id: string; readonly rev: number },
+		lines: readonly LineView[],
+		known: BulkTree
+	) {
+		this.#key = `costmary:formula:${version.id}`;
+		this.rev = version.rev;
 		this.#base = copyOf(lines);
 		this.lines = copyOf(lines);
-		this.materials = materials;
+		this.#know(known);
 	}
 
 	get dirty(): boolean {
@@ -35,15 +49,16 @@ export class Editor {
 	restore(): void {
 		const kept = localStorage.getItem(this.#key);
 		if (!kept) return;
-		const copy = JSON.parse(kept) as { lines: EditedLine[]; materials: MaterialView[] };
+		const copy = JSON.parse(kept) as { lines: EditedLine[] } & BulkTree;
 		if (JSON.stringify(copy.lines) === JSON.stringify(this.#base)) return;
-		this.lines = copy.lines;
-		this.#know(copy.materials);
+		this.lines = copy.lines.map((line) => ({ ...PLAIN, ...line }));
+		this.#know({ materials: copy.materials, bulks: copy.bulks ?? [] });
 		this.restored = true;
 	}
 
 	keep(): void {
-		if (this.dirty) localStorage.setItem(this.#key, JSON.stringify({ lines: this.lines, materials: this.materials }));
+		const { lines, materials, bulks } = this;
+		if (this.dirty) localStorage.setItem(this.#key, JSON.stringify({ lines, materials, bulks }));
 		else localStorage.removeItem(this.#key);
 	}
 
@@ -57,12 +72,29 @@ export class Editor {
 		if (last) this.lines = last;
 	}
 
-	add(material: MaterialView, percent = ''): void {
+	/** False when the bulk cannot be read. */
+	async add(suggestion: Suggestion, percent = ''): Promise<boolean> {
+		const { kind } = suggestion;
+		const known =
+			kind === 'material' ? { materials: [suggestion.material], bulks: [] } : await bulkAt(suggestion.code, null);
+		if (!known) return false;
 		this.remember();
-		this.#know([material]);
+		this.#know(known);
 		const phase = this.lines.at(-1)?.phase ?? 'A';
-		const { code, name } = material;
-		this.lines.push({ id: crypto.randomUUID(), phase, kind: 'material', code, name, percent, qs: false });
+		const { code, name } = kind === 'material' ? suggestion.material : suggestion;
+		this.lines.push({ ...PLAIN, id: crypto.randomUUID(), phase, kind, code, name, percent });
+		return true;
+	}
+
+	/** Pins a bulk to one of its versions, or lets it follow the newest again. */
+	async pin(line: LineView, pinned: number | null): Promise<void> {
+		const known = await bulkAt(line.code, pinned);
+		const own = this.lines.find(({ id }) => id === line.id);
+		if (!known || !own) return;
+		this.remember();
+		this.bulks = this.bulks.filter(({ code }) => !known.bulks.some((bulk) => bulk.code === code));
+		this.#know(known);
+		Object.assign(own, { pinned, pinReason: pinned === null ? '' : own.pinReason });
 	}
 
 	remove(line: LineView): void {
@@ -90,16 +122,15 @@ export class Editor {
 	}
 
 	async #addByName(row: PastedRow): Promise<boolean> {
-		const response = await fetch(`/formulas/materials.json?q=${encodeURIComponent(row.name)}`);
-		const [first] = response.ok ? ((await response.json()) as MaterialView[]) : [];
-		if (!first) return false;
-		this.add(first, row.percent);
-		return true;
+		const response = await fetch(paths.formulaLines(row.name, this.code));
+		const [first] = response.ok ? ((await response.json()) as Suggestion[]) : [];
+		return first ? this.add(first, row.percent) : false;
 	}
 
-	#know(materials: readonly MaterialView[]): void {
+	#know({ materials, bulks }: BulkTree): void {
 		const fresh = materials.filter(({ code }) => !this.materials.some((known) => known.code === code));
 		this.materials = [...this.materials, ...fresh];
+		this.bulks = [...this.bulks, ...bulks.filter(({ code }) => !this.bulks.some((known) => known.code === code))];
 	}
 
 	async save(): Promise<void> {

@@ -1,5 +1,5 @@
 import { signedIn } from '$lib/server/http/signed-in';
-import { suggestMaterials } from '$lib/server/services/formulas';
+import { suggestLines } from '$lib/server/services/formulas';
 import type { RequestHandler } from './$types';
 
 const LONGEST_SEARCH = 100;
@@ -7,5 +7,6 @@ const LONGEST_SEARCH = 100;
 export const GET: RequestHandler = ({ locals, url }) =>
 	signedIn(locals, async (actor) => {
 		const text = (url.searchParams.get('q') ?? '').trim().slice(0, LONGEST_SEARCH);
-		return Response.json(text ? await suggestMaterials(actor, text) : []);
+		const code = (url.searchParams.get('for') ?? '').slice(0, LONGEST_SEARCH);
+		return Response.json(text ? await suggestLines(actor, text, code) : []);
 	});

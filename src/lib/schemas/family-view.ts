@@ -38,5 +38,7 @@ export interface ProductImpact {
 }
 export interface ImpactView {
 	readonly number: number;
+	/** Formulas that take this one in: those that follow it move with it. */
+	readonly variants: readonly { readonly name: string; readonly pinned: number | null }[];
 	readonly products: readonly ProductImpact[];
 }

@@ -3,6 +3,7 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
 import type { FormulaVersionRef } from '../db/basis';
+import { familyOf } from '../db/families';
 import { formulaByCode, versionsOfFormula } from '../db/formulas';
 import { productById, productsUsingFormulas } from '../db/products';
 import { withActor, type Trx } from '../db/with-actor';
@@ -25,7 +26,8 @@ export function readImpact(actor: Actor, code: string): Promise<ImpactView> {
 		const draft = await draftOf(trx, code);
 		const products: ProductImpact[] = [];
 		for (const id of await productsUsingFormulas(trx, [draft.formulaId])) products.push(await impactOn(trx, id, draft));
-		return { number: draft.number, products };
+		const members = await familyOf(trx, draft.formulaId);
+		return { number: draft.number, variants: members.map(({ name, pinned }) => ({ name, pinned })), products };
 	});
 }
 

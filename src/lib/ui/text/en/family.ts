@@ -25,6 +25,8 @@ export const family = {
 export const impact = {
 	title: (number: number) => `What releasing ${number} moves`,
 	none: 'No product rests on this formula. Nothing outside it moves.',
+	variant: (name: string, pinned: number | null) =>
+		pinned === null ? `${name} follows and moves with it.` : `${name} is pinned to ${pinned} and stays.`,
 	product: (name: string, client: string) => `${name}, ${client}`,
 	listMoves: 'The list says something else:',
 	listStays: 'The list stays as it is.',

@@ -268,3 +268,26 @@ export interface ProductFileData {
 	readonly copies: readonly LabelCopyData[];
 	readonly evidence: readonly EvidencePrint[];
 }
+
+/** The weighings of one batch; every amount is in g and ready to print. */
+export interface BatchSheetData {
+	readonly language: PrintLanguage;
+	readonly laboratory: string;
+	readonly formulaName: string;
+	readonly formulaCode: string;
+	readonly version: number;
+	readonly released: boolean;
+	readonly size: string;
+	readonly step: string;
+	readonly total: string;
+	readonly lines: readonly {
+		readonly code: string;
+		readonly name: string;
+		readonly phase: string;
+		/** Names of the bulks above it; empty for a line of the formula itself. */
+		readonly within: string;
+		readonly amount: string;
+		/** Content of the lot in % of the nominal one; empty where it is not corrected. */
+		readonly lot: string;
+	}[];
+}

@@ -11,6 +11,23 @@ export const en = {
 		formulaDraft: (formula: string) => `${formula}, not released`,
 		none: 'none'
 	},
+	batch: {
+		title: (formula: string) => `Batch sheet, ${formula}`,
+		formula: (code: string, version: number, released: boolean) =>
+			`${code}, ${released ? 'version' : 'draft'} ${version}`,
+		lead: (size: string, step: string) =>
+			`Batch of ${size} g, weighed in steps of ${step} g. The q.s. line takes the rounding.`,
+		phase: 'Phase',
+		material: 'Material',
+		planned: 'planned, g',
+		weighed: 'weighed, g',
+		lot: 'lot',
+		within: (bulks: string) => `in ${bulks}`,
+		corrected: (content: string) => `lot of ${content} % of the nominal content`,
+		total: 'Total',
+		signature: 'Weighed by, date: ____________________   Checked by, date: ____________________',
+		caution: 'Weigh only from the released version. The method and the safety data sheets of the materials apply.'
+	},
 	copy: {
 		title: (pack: string, market: string) => `${pack}, ${market}`,
 		running: (product: string) => `Label copy, ${product}`,

@@ -173,6 +173,18 @@ export const ACCESS: readonly AccessRow[] = [
 		answers: STAFF
 	},
 	{
+		route: '/(bench)/formulas/[code]/[version]/batch',
+		call: 'GET',
+		address: '/formulas/F-0012/1/batch',
+		answers: STAFF
+	},
+	{
+		route: '/(bench)/formulas/[code]/[version]/batch/pdf',
+		call: 'GET',
+		address: '/formulas/F-0012/99/batch/pdf',
+		answers: [404, 404, 404, 404, 404, 303]
+	},
+	{
 		route: '/(bench)/formulas/[code]/family',
 		call: 'GET',
 		address: '/formulas/F-0001/family',

@@ -46,6 +46,9 @@ export const paths = {
 	materialVersion: (code: string, version: string | number, query?: Query) =>
 		withQuery(`/materials/${part(code)}/${part(version)}`, query),
 
+	batch: (code: string, version: number) => `/formulas/${part(code)}/${part(version)}/batch`,
+	batchPdf: (code: string, version: number, query: string) =>
+		`/formulas/${part(code)}/${part(version)}/batch/pdf${query ? `?${query}` : ''}`,
 	formulas: (query?: Query) => withQuery('/formulas', query),
 	newFormula: () => '/formulas/new',
 	formulaLines: (q: string, forCode: string) => withQuery('/formulas/lines.json', { q, for: forCode }),

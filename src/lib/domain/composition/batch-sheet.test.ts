@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { formatRatio } from '../quantity/ratio';
+import type { Id } from '../quantity/units';
 import { requestOf, type Formulas, type Materials } from '../testing/formula';
 import { batchSheet } from './batch-sheet';
 
@@ -73,6 +74,30 @@ describe('a batch sheet', () => {
 		const [salt] = sheet({ F }, 1000n, 1n);
 		expect(salt && formatRatio(salt.exact, 0, 8, 'nearest')).toBe('1.23456');
 		expect(salt?.amount).toBe(1n);
+	});
+
+	test('a lot of less content is weighed more, and the q.s. line gives way', () => {
+		const F = [
+			{ material: 'oil', percent: '10' },
+			{ material: 'water', qs: true }
+		];
+		const potency = new Map([['oil' as Id<'material'>, { num: 100n, den: 80n }]]);
+		const outcome = batchSheet(requestOf(MATERIALS, { F }, 'F'), { size: 1000n, step: 1n, potency });
+		// 100 g of oil at 80 % of its nominal content: 125 g; water 875 g instead of 900 g.
+		expect(outcome.ok && amountsOf(outcome.value)).toEqual([
+			['oil', 125],
+			['water', 875]
+		]);
+	});
+
+	test('without a q.s. line no lot can be corrected', () => {
+		const F = [
+			{ material: 'oil', percent: '10' },
+			{ material: 'water', percent: '90' }
+		];
+		const potency = new Map([['oil' as Id<'material'>, { num: 100n, den: 80n }]]);
+		const outcome = batchSheet(requestOf(MATERIALS, { F }, 'F'), { size: 1000n, step: 1n, potency });
+		expect(!outcome.ok && outcome.faults.map(({ kind }) => kind)).toEqual(['potencyWithoutQs']);
 	});
 
 	test('a size that is no multiple of the step is no batch', () => {

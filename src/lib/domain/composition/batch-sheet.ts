@@ -10,7 +10,17 @@ import type { CompositionFault, CompositionRequest, FormulaVersionLines } from '
 export interface BatchSize {
 	readonly size: bigint;
 	readonly step: bigint;
+	/**
+	 * Nominal over actual content of the lot at hand, by material: a lot of 96 % of its nominal content is weighed 100/96 times.
+	 * The q.s. line gives way.
+	 */
+	readonly potency?: ReadonlyMap<Id<'material'>, Ratio>;
 }
+export type BatchFault =
+	| CompositionFault
+	/** A corrected lot needs a q.s. line that gives way, and one that is large enough. */
+	| { readonly kind: 'potencyWithoutQs'; readonly formula: Id<'formula'> }
+	| { readonly kind: 'potencyAboveQs'; readonly formula: Id<'formula'> };
 
 /** One weighing: what it would be exactly, and what the balance can show. */
 export interface BatchLine {
@@ -27,14 +37,15 @@ export interface BatchLine {
 }
 
 /**
- * The weighings of one batch, bulks followed down to materials, at the target of every range line. Each is rounded to the step;
+ * The weighings of one batch, bulks followed down to materials, at the target of every range line, corrected for the content of
+ * the lots. Each is rounded to the step;
  * the q.s. line takes the rounding, so that the amounts sum to the batch exactly; without a q.s. line the largest remainders do.
  * Faults as compose(). @throws RangeError for a size that is no positive multiple of a positive step.
  */
 export function batchSheet(
 	request: CompositionRequest,
-	{ size, step }: BatchSize
-): Outcome<readonly BatchLine[], CompositionFault> {
+	{ size, step, potency }: BatchSize
+): Outcome<readonly BatchLine[], BatchFault> {
 	if (step <= 0n || size <= 0n || size % step !== 0n)
 		throw new RangeError('a batch is a whole number of balance steps');
 	const expanded = expand(request);
@@ -43,8 +54,12 @@ export function batchSheet(
 	const faults = judgeAmounts(formulas);
 	if (faults.length > 0) return { ok: false, faults };
 	const shares = sharesOf(formulas, null);
-	const exact = leaves.map((leaf) => exactAmount(leaf, shares, size));
 	const taker = takerOf(leaves, formulas);
+	const nominal = leaves.map((leaf) => exactAmount(leaf, shares, size));
+	const exact = potency ? corrected(leaves, nominal, potency, taker) : nominal;
+	if (!exact) return { ok: false, faults: [{ kind: 'potencyWithoutQs', formula: request.formula }] };
+	if (exact.some(({ num }) => num < 0n))
+		return { ok: false, faults: [{ kind: 'potencyAboveQs', formula: request.formula }] };
 	const amounts = rounded(exact, size, step, taker);
 	return good(
 		leaves.map(({ material, formulas: above, path }, at) => ({
@@ -62,6 +77,35 @@ export function batchSheet(
 function exactAmount({ path }: Leaf, shares: ReadonlyMap<Id<'line'>, bigint>, size: bigint): Ratio {
 	const whole = 10n ** BigInt(LINE_DECIMALS + 2);
 	return path.reduce((part, line) => ratio(part.num * (shares.get(line) ?? 0n), part.den * whole), ratio(size, 1n));
+}
+
+/** Every weighing at the content of its lot; what that adds or saves, the q.s. line takes. Null without one. */
+function corrected(
+	leaves: readonly Leaf[],
+	nominal: readonly Ratio[],
+	potency: ReadonlyMap<Id<'material'>, Ratio>,
+	taker: number
+): readonly Ratio[] | null {
+	const factors = leaves.map(({ material }, at) => (at === taker ? undefined : potency.get(material)));
+	if (factors.every((factor) => factor === undefined)) return nominal;
+	if (taker < 0) return null;
+	const own = nominal.map(({ num, den }, at) => {
+		const factor = factors[at];
+		return factor ? ratio(num * factor.num, den * factor.den) : ratio(num, den);
+	});
+	const given = own.reduce(
+		(sum, each, at) => {
+			const was = nominal[at] ?? each;
+			return ratio(
+				sum.num * each.den * was.den + (each.num * was.den - was.num * each.den) * sum.den,
+				sum.den * each.den * was.den
+			);
+		},
+		ratio(0n, 1n)
+	);
+	return own.map((each, at) =>
+		at === taker ? ratio(each.num * given.den - given.num * each.den, each.den * given.den) : each
+	);
 }
 
 /** The weighing behind the outer q.s. line: itself, or inside a bulk that bulk's own q.s. line. */

@@ -17,7 +17,7 @@ async function readAll(): Promise<string> {
 function readRequest(text: string): PdfRequest | null {
 	try {
 		const request = JSON.parse(text) as PdfRequest;
-		const known = request.kind === 'label-copy' || request.kind === 'product-file';
+		const known = ['label-copy', 'product-file', 'batch-sheet'].includes(request.kind);
 		return known && typeof request.data === 'object' && !Number.isNaN(Date.parse(request.creationDate))
 			? request
 			: null;

@@ -1,3 +1,4 @@
+import { batchSheetDocument } from '../../../../templates/pdf/batch-sheet';
 import { labelCopy } from '../../../../templates/pdf/label-copy';
 import { productFile } from '../../../../templates/pdf/product-file';
 import { phrasesIn } from '../../../../templates/phrases/index';
@@ -12,6 +13,16 @@ export async function print(request: PdfRequest, options: Options = {}): Promise
 	const creationDate = new Date(request.creationDate);
 	const shelf = openShelf(options.fontFolder);
 	const t = phrasesIn(request.data.language);
+	if (request.kind === 'batch-sheet') {
+		const { data } = request;
+		return renderPdf(batchSheetDocument(data), {
+			...options,
+			creationDate,
+			title: t.batch.title(data.formulaName),
+			author: data.laboratory,
+			subject: data.formulaCode
+		});
+	}
 	if (request.kind === 'label-copy') {
 		const { data } = request;
 		return renderPdf(labelCopy(data, shelf), {

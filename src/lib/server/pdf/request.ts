@@ -1,8 +1,9 @@
-import type { LabelCopyData, ProductFileData } from '../../../../templates/pdf/types';
+import type { BatchSheetData, LabelCopyData, ProductFileData } from '../../../../templates/pdf/types';
 
 /** What the parent process asks of the child: one request, one document. `creationDate` is an ISO instant. */
 export type PdfRequest =
 	| { readonly kind: 'label-copy'; readonly data: LabelCopyData; readonly creationDate: string }
+	| { readonly kind: 'batch-sheet'; readonly data: BatchSheetData; readonly creationDate: string }
 	| { readonly kind: 'product-file'; readonly data: ProductFileData; readonly creationDate: string };
 
 /** One line of JSON on the child's standard error. `percent` counts the writing of pages, after the layout. */

@@ -1,4 +1,5 @@
-import { batchSheet } from '$lib/domain/composition/batch-sheet';
+import { batchSheet, type BatchFault } from '$lib/domain/composition/batch-sheet';
+import type { CompositionFault } from '$lib/domain/composition/types';
 import { formatExact, parseDecimal } from '$lib/domain/quantity/decimal';
 import { formatRatio } from '$lib/domain/quantity/ratio';
 import { MASS_DECIMALS, type BatchSheetInput } from '$lib/schemas/compute';
@@ -19,7 +20,7 @@ export function computeBatchSheet(input: BatchSheetInput) {
 		throw new Refused('invalid', { errors: [{ path: 'size', value: input.size, limit: input.step, message }] });
 	}
 	const outcome = batchSheet(compositionRequestOf(input), { size, step });
-	if (!outcome.ok) return { lines: [], faults: faultViews(outcome.faults, input) };
+	if (!outcome.ok) return { lines: [], faults: faultViews(outcome.faults.filter(isOfComposition), input) };
 	return {
 		unit: input.unit,
 		lines: outcome.value.map(({ material, formulas, amount, exact, takesRounding }) => ({
@@ -36,6 +37,10 @@ export function computeBatchSheet(input: BatchSheetInput) {
 		faults: []
 	};
 }
+
+/** Lots are not corrected in this call, so that only faults of the composition can come. */
+const isOfComposition = (fault: BatchFault): fault is CompositionFault =>
+	fault.kind !== 'potencyWithoutQs' && fault.kind !== 'potencyAboveQs';
 
 function massOf(text: string): bigint {
 	const parsed = parseDecimal(text, { decimals: MASS_DECIMALS });

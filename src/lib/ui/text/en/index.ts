@@ -1,3 +1,4 @@
+import { batch } from './batch';
 import { claims } from './claims';
 import { common } from './common';
 import { counter } from './counter';
@@ -21,6 +22,7 @@ export const en = {
 	shell,
 	door,
 	errors,
+	batch,
 	claims,
 	counter,
 	evidence,

@@ -23,6 +23,8 @@ const PAGES: Readonly<Partial<Record<RoleName, readonly string[]>>> = {
 		'/formulas/F-0012/1',
 		'/formulas/F-0002/1',
 		'/formulas/F-0001/family',
+		'/formulas/F-0012/compare',
+		'/formulas/F-0012/1/batch',
 		'/evidence',
 		'/rules',
 		'/rules/eu-1223-2009/art-19-1-g'

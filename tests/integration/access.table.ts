@@ -173,6 +173,20 @@ export const ACCESS: readonly AccessRow[] = [
 		answers: STAFF
 	},
 	{
+		route: '/(bench)/formulas/[code]/[version]',
+		call: '?/trial',
+		address: '/formulas/NO-SUCH/1',
+		body: { madeOn: '2026-01-01', ph: '', viscosity: '', verdict: 'good', remark: '', pictureId: '' },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/formulas/[code]/[version]',
+		call: '?/continueTrial',
+		address: '/formulas/NO-SUCH/1',
+		body: { number: '1' },
+		answers: BENCH_CHANGES
+	},
+	{
 		route: '/(bench)/formulas/[code]/[version]/batch',
 		call: 'GET',
 		address: '/formulas/F-0012/1/batch',
@@ -183,6 +197,12 @@ export const ACCESS: readonly AccessRow[] = [
 		call: 'GET',
 		address: '/formulas/F-0012/99/batch/pdf',
 		answers: [404, 404, 404, 404, 404, 303]
+	},
+	{
+		route: '/(bench)/formulas/[code]/compare',
+		call: 'GET',
+		address: '/formulas/F-0012/compare',
+		answers: STAFF
 	},
 	{
 		route: '/(bench)/formulas/[code]/family',

@@ -5,6 +5,7 @@ import type { Actor } from '$lib/server/access/actor';
 import { newId } from '$lib/server/db/id';
 import { createCopy, saveCopy, submitCopy } from '$lib/server/services/copies';
 import { readFamily } from '$lib/server/services/formula-family';
+import { compareVersions } from '$lib/server/services/formula-compare';
 import { readImpact } from '$lib/server/services/formula-impact';
 import {
 	createFormula,
@@ -150,6 +151,13 @@ describe('a base and three variants', () => {
 			'0.0958'
 		]);
 	});
+});
+
+test('two versions of the base are compared by line, by ingredient and by list', async () => {
+	const view = await compareVersions(officer, 'BASE', 1, 2);
+	expect(view.lines.filter(({ a, b }) => a !== b)).toMatchObject([{ key: 'GLY', a: '4', b: '4.5' }]);
+	expect(view.ingredients.find(({ name }) => name === 'Aqua')).toMatchObject({ a: '95', b: '94.5' });
+	expect(view.lists.a).toBe(view.lists.b);
 });
 
 test('a bulk that contains itself is refused with the path named', async () => {

@@ -54,6 +54,7 @@ export const paths = {
 	formulaLines: (q: string, forCode: string) => withQuery('/formulas/lines.json', { q, for: forCode }),
 	bulk: (code: string, version: number | null) => withQuery('/formulas/bulk.json', { code, version }),
 	impact: (code: string) => `/formulas/${part(code)}/impact.json`,
+	compare: (code: string, query?: Query) => withQuery(`/formulas/${part(code)}/compare`, query),
 	family: (code: string) => `/formulas/${part(code)}/family`,
 	formula: (code: string, query?: Query) => withQuery(`/formulas/${part(code)}`, query),
 	formulaVersion: (code: string, version: string | number, query?: Query) =>

@@ -12,7 +12,7 @@ import { familyOf, type FamilyMember } from '../db/families';
 import { formulaByCode, versionsOfFormula } from '../db/formulas';
 import { withActor, type Trx } from '../db/with-actor';
 
-interface Read {
+export interface Read {
 	readonly composition: Composition;
 	readonly loaded: LoadedMaterials;
 }
@@ -65,7 +65,11 @@ export function readFamily(actor: Actor, code: string): Promise<FamilyView> {
 	});
 }
 
-async function readVersion(trx: Trx, version: FormulaVersionRef, instead?: FormulaVersionRef): Promise<Read | null> {
+export async function readVersion(
+	trx: Trx,
+	version: FormulaVersionRef,
+	instead?: FormulaVersionRef
+): Promise<Read | null> {
 	const tree = await loadTree(trx, version, instead);
 	const lines = [...tree.formulas.values()].flatMap((each) => each.lines);
 	const loaded = await loadMaterials(trx, [...new Set(lines.flatMap((line) => line.material ?? []))], today());
@@ -96,14 +100,14 @@ function restOf(read: Read | null, { baseLineId }: FamilyMember): string | null 
 	return formatExact(sum, composition.weightDecimals);
 }
 
-interface Named {
+export interface Named {
 	readonly key: string;
 	readonly name: string;
 	readonly share: bigint;
 	readonly decimals: number;
 }
 
-const ingredientsIn = ({ composition, loaded }: Read): readonly Named[] =>
+export const ingredientsIn = ({ composition, loaded }: Read): readonly Named[] =>
 	composition.rows
 		.filter(({ roles }) => roles.has('ingredient') || roles.has('carryOver'))
 		.map(({ key, substance, share }) => ({
@@ -112,6 +116,8 @@ const ingredientsIn = ({ composition, loaded }: Read): readonly Named[] =>
 			share: share.typical,
 			decimals: composition.shareDecimals
 		}));
+
+export const namedText = ({ share, decimals }: Named) => formatExact(share, decimals);
 
 const materialsIn = ({ composition, loaded }: Read): readonly Named[] =>
 	composition.weighed.map(({ material, typicalWeight }) => ({
@@ -137,7 +143,7 @@ function rowsOf(pairs: readonly Pair[], namesIn: (read: Read) => readonly Named[
 		(a, b) =>
 			Number(b.inBase) - Number(a.inBase) || compare(b.order, a.order) || compareNames(a.named.name, b.named.name)
 	);
-	const text = (named: Named | undefined) => (named ? formatExact(named.share, named.decimals) : null);
+	const text = (named: Named | undefined) => (named ? namedText(named) : null);
 	return rows.map(({ named, inBase }) => ({
 		key: named.key,
 		name: named.name,

@@ -7,6 +7,7 @@ import { ALLERGENS, NAME_BOOK } from '$lib/reference';
 import { readShare, type FormulaDraft, type NewFormula } from '$lib/schemas/formula';
 import type { BulkTree, LineView, MaterialView, Suggestion } from '$lib/schemas/grid-view';
 import type { ListQuery, Page } from '$lib/schemas/paging';
+import type { TrialView } from '$lib/schemas/trial';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
@@ -27,6 +28,7 @@ import {
 	type FormulaVersionRow
 } from '../db/formulas';
 import { newId } from '../db/id';
+import { trialsOf } from '../db/trials';
 import { withActor, type Trx } from '../db/with-actor';
 import { contentHash } from '../hash';
 import { Refused } from '../refused';
@@ -75,6 +77,7 @@ export interface FormulaView {
 	readonly materials: readonly MaterialView[];
 	/** Every bulk of the tree. */
 	readonly bulks: BulkTree['bulks'];
+	readonly trials: readonly TrialView[];
 	/** Formulas that take this one in as a bulk. */
 	readonly variants: readonly { readonly code: string; readonly name: string }[];
 	readonly products: Awaited<ReturnType<typeof productsOfFormula>>;
@@ -102,6 +105,7 @@ export function readFormula(actor: Actor, code: string, number: number | null): 
 			lines,
 			before,
 			...tree,
+			trials: await trialsOf(trx, formula.id),
 			variants: (await familyOf(trx, formula.id)).map(({ code, name }) => ({ code, name })),
 			products: await productsOfFormula(trx, formula.id),
 			batchDay: today(),
@@ -143,24 +147,33 @@ export function draftFormula(actor: Actor, code: string): Promise<number> {
 		const [newest] = await versionsOfFormula(trx, formula.id);
 		if (!newest) throw new Refused('not-found');
 		if (newest.state === 'draft') throw new Refused('exists', { field: 'draft', value: newest.number });
-		const number = newest.number + 1;
-		const draftId = await insertDraft(trx, actor, formula.id, number);
-		const rows = await trx.selectFrom('formula_line').selectAll().where('formula_version_id', '=', newest.id).execute();
-		if (rows.length > 0) {
-			await trx
-				.insertInto('formula_line')
-				.values(rows.map((row) => ({ ...row, id: newId(), formula_version_id: draftId })))
-				.execute();
-		}
-		const stream = { kind: 'formula', id: formula.id } as const;
-		await audit(trx, actor, {
-			stream,
-			action: 'draft-opened',
-			subject: `formula-version/${draftId}`,
-			after: { number }
-		});
-		return number;
+		return openDraft(trx, actor, formula.id, newest);
 	});
+}
+
+/** A draft behind the newest version, with its lines; its number. */
+export async function openDraft(
+	trx: Trx,
+	actor: Actor,
+	formulaId: string,
+	newest: Pick<FormulaVersionRow, 'id' | 'number'>
+): Promise<number> {
+	const number = newest.number + 1;
+	const draftId = await insertDraft(trx, actor, formulaId, number);
+	const rows = await trx.selectFrom('formula_line').selectAll().where('formula_version_id', '=', newest.id).execute();
+	if (rows.length > 0) {
+		await trx
+			.insertInto('formula_line')
+			.values(rows.map((row) => ({ ...row, id: newId(), formula_version_id: draftId })))
+			.execute();
+	}
+	await audit(trx, actor, {
+		stream: { kind: 'formula', id: formulaId },
+		action: 'draft-opened',
+		subject: `formula-version/${draftId}`,
+		after: { number }
+	});
+	return number;
 }
 
 /** Saves the whole grid. @throws Refused 'conflict' with the lines somebody else saved, 'invalid' for an unknown code. */
@@ -169,24 +182,37 @@ export function saveFormulaDraft(actor: Actor, code: string, number: number, dra
 	return withActor(actor, async (trx) => {
 		const formula = await formulaByCode(trx, code);
 		const version = await lockFormulaDraft(trx, formula.id, number);
-		const before = await linesOfVersion(trx, version.id);
-		if (version.rev !== draft.rev) throw new Refused('conflict', { rev: version.rev, theirs: before });
-		await trx.deleteFrom('formula_line').where('formula_version_id', '=', version.id).execute();
-		await insertLines(trx, version.id, draft);
-		const rev = version.rev + 1;
-		await trx.updateTable('formula_version').set({ rev }).where('id', '=', version.id).execute();
-		await audit(trx, actor, {
-			stream: { kind: 'formula', id: formula.id },
-			action: 'draft-saved',
-			subject: `formula-version/${version.id}`,
-			before,
-			after: draft.lines
-		});
-		return rev;
+		if (version.rev !== draft.rev)
+			throw new Refused('conflict', { rev: version.rev, theirs: await linesOfVersion(trx, version.id) });
+		return draftLines(trx, actor, formula.id, version, draft.lines, { action: 'draft-saved', after: draft.lines });
 	});
 }
 
-async function insertLines(trx: Trx, versionId: string, { lines }: FormulaDraft): Promise<void> {
+/** Puts these lines in place of a locked draft's; its next rev. */
+export async function draftLines(
+	trx: Trx,
+	actor: Actor,
+	formulaId: string,
+	version: { readonly id: string; readonly rev: number },
+	lines: FormulaDraft['lines'],
+	{ action, after }: { readonly action: string; readonly after: object }
+): Promise<number> {
+	const before = await linesOfVersion(trx, version.id);
+	await trx.deleteFrom('formula_line').where('formula_version_id', '=', version.id).execute();
+	await insertLines(trx, version.id, lines);
+	const rev = version.rev + 1;
+	await trx.updateTable('formula_version').set({ rev }).where('id', '=', version.id).execute();
+	await audit(trx, actor, {
+		stream: { kind: 'formula', id: formulaId },
+		action,
+		subject: `formula-version/${version.id}`,
+		before,
+		after
+	});
+	return rev;
+}
+
+async function insertLines(trx: Trx, versionId: string, lines: FormulaDraft['lines']): Promise<void> {
 	if (lines.length === 0) return;
 	const materials = await idsByCode(trx, 'material', lines);
 	const formulas = await idsByCode(trx, 'formula', lines);

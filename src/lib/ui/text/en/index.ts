@@ -1,6 +1,7 @@
 import { batch } from './batch';
 import { claims } from './claims';
 import { common } from './common';
+import { compare } from './compare';
 import { counter } from './counter';
 import { door } from './door';
 import { errors } from './errors';
@@ -15,6 +16,7 @@ import { productDetails } from './product-details';
 import { composition, list, productFormula, products } from './products';
 import { auditTrail, desk, rules } from './rules';
 import { shell } from './shell';
+import { trials } from './trials';
 
 /** Every sentence of the product by code, one file for each area. Another language satisfies `typeof en`. */
 export const en = {
@@ -24,6 +26,7 @@ export const en = {
 	errors,
 	batch,
 	claims,
+	compare,
 	counter,
 	evidence,
 	family,
@@ -40,5 +43,6 @@ export const en = {
 	productDetails,
 	auditTrail,
 	desk,
-	rules
+	rules,
+	trials
 };

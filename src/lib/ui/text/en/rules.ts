@@ -43,6 +43,8 @@ export const auditTrail = {
 		'formula-created': 'a formula was made',
 		'product-created': 'a product was made',
 		'details-saved': 'the product’s details were saved',
+		'trial-recorded': 'a trial was recorded',
+		'trial-continued': 'a draft went on from a trial',
 		'list-arranged': 'the order of a list was set',
 		'carry-over-decided': 'a carry-over was decided',
 		'pack-added': 'a pack was added',

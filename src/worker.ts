@@ -1,6 +1,7 @@
 import { closePool } from '$lib/server/db/pool';
 import { requireMigrated } from '$lib/server/db/migrated';
 import { registerBuildProductFile } from '$lib/server/jobs/build-product-file';
+import { registerMail } from '$lib/server/jobs/mail';
 import { registerSweep } from '$lib/server/jobs/sweep';
 import { startQueue, stopQueue } from '$lib/server/jobs/queue';
 import { closeBucket } from '$lib/server/storage/bucket';
@@ -10,6 +11,7 @@ async function start(): Promise<void> {
 	await requireMigrated();
 	const queue = await startQueue({ supervises: true });
 	await registerBuildProductFile(queue);
+	await registerMail(queue);
 	await registerSweep(queue);
 	console.log(JSON.stringify({ worker: 'ready' }));
 }

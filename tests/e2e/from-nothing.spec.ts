@@ -1,5 +1,6 @@
 import type { Page } from '@playwright/test';
 import { expect, hydrated, open, signIn, test } from './support/app';
+import { linkMailedTo } from './support/mail';
 import { checkPdf, pdfText } from './support/pdf';
 
 test.use({ workspace: 'empty' });
@@ -60,6 +61,30 @@ test('the administrator adds the client and the people', async ({ page, app }) =
 	await expect(page.getByRole('listitem').filter({ hasText: 'Larch & Rowe' })).toBeVisible();
 	await addPerson(page, 'Olive Stander', OFFICER.email, { role: 'regulatory officer' });
 	await addPerson(page, 'Rowan Larch', CLIENT.email, { client: 'Larch & Rowe' });
+});
+
+test('somebody who is invited by mail chooses a password and is in', async ({ page, app }) => {
+	const email = 'invited@laboratory.example';
+	await signIn(page, app.account('administrator'));
+	await open(page, '/people');
+	await page.getByRole('textbox', { name: 'Name', exact: true }).fill('Linden Ash');
+	await page.getByRole('textbox', { name: 'E-mail' }).fill(email);
+	await page.getByRole('checkbox', { name: 'formulator' }).check();
+	await page.getByRole('button', { name: 'Add a person' }).click();
+	await expect(page.getByRole('row', { name: new RegExp(email) })).toBeVisible();
+	await page.context().clearCookies();
+
+	const link = await linkMailedTo(email);
+	await open(page, link);
+	await expect(page.getByRole('heading', { level: 1 })).toHaveText('Welcome, Linden Ash');
+	await page.getByLabel('New password').fill('short');
+	await page.getByRole('button', { name: 'Set the password' }).click();
+	await expect(page.getByText('The password has 5 characters')).toBeVisible();
+	await page.getByLabel('New password').fill(PASSWORD);
+	await page.getByRole('button', { name: 'Set the password' }).click();
+	await expect(page).toHaveURL('/desk');
+	await open(page, link);
+	await expect(page.getByRole('heading', { level: 1 })).toHaveText('This link no longer works');
 });
 
 test('two materials, one formula and one product give a list', async ({ page }) => {

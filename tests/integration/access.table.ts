@@ -538,6 +538,55 @@ export const ACCESS: readonly AccessRow[] = [
 		body: { email: 'no', password: '' },
 		answers: [400, 400, 400, 400, 400, 400]
 	},
+	{ route: '/(door)/reset', call: 'GET', address: '/reset', answers: [200, 200, 200, 200, 200, 200] },
+	{
+		route: '/(door)/reset',
+		call: '?/default',
+		address: '/reset',
+		body: { email: 'no' },
+		answers: [400, 400, 400, 400, 400, 400]
+	},
+	{
+		route: '/(door)/reset/[secret]',
+		call: 'GET',
+		address: '/reset/no-such-secret',
+		answers: [200, 200, 200, 200, 200, 200]
+	},
+	{
+		route: '/(door)/reset/[secret]',
+		call: '?/default',
+		address: '/reset/no-such-secret',
+		body: { password: 'a long enough password' },
+		answers: [404, 404, 404, 404, 404, 404]
+	},
+	{
+		route: '/(door)/invitation/[secret]',
+		call: 'GET',
+		address: '/invitation/no-such-secret',
+		answers: [200, 200, 200, 200, 200, 200]
+	},
+	{
+		route: '/(door)/invitation/[secret]',
+		call: '?/default',
+		address: '/invitation/no-such-secret',
+		body: { password: 'a long enough password' },
+		answers: [404, 404, 404, 404, 404, 404]
+	},
+	{ route: '/(door)/account', call: 'GET', address: '/account', answers: [200, 200, 200, 200, 200, 303] },
+	{
+		route: '/(door)/account',
+		call: '?/change',
+		address: '/account',
+		body: { present: '', next: '' },
+		answers: [400, 400, 400, 400, 400, 303]
+	},
+	{
+		route: '/(bench)/people',
+		call: '?/invite',
+		address: '/people',
+		body: { personId: NO_ID },
+		answers: [403, 403, 403, 404, 404, 303]
+	},
 	{ route: '/healthz', call: 'GET', address: '/healthz', answers: [200, 200, 200, 200, 200, 200] },
 	{
 		route: '/preferences',
@@ -574,5 +623,13 @@ export const ACCESS: readonly AccessRow[] = [
 		body: { json: {} },
 		answers: [401, 401, 401, 401, 401, 401]
 	},
-	{ route: '/(door)/sign-out', call: 'POST', address: '/sign-out', body: {}, answers: [303, 303, 303, 303, 303, 303] }
+	// These two end the sign-in that the rows before them stand on.
+	{ route: '/(door)/sign-out', call: 'POST', address: '/sign-out', body: {}, answers: [303, 303, 303, 303, 303, 303] },
+	{
+		route: '/(door)/account',
+		call: '?/everywhere',
+		address: '/account',
+		body: {},
+		answers: [303, 303, 303, 303, 303, 303]
+	}
 ];

@@ -20,6 +20,8 @@ export type ProductPart = (typeof PRODUCT_PARTS)[number];
 
 export const paths = {
 	signIn: (query?: { next?: string }) => withQuery('/sign-in', query),
+	reset: () => '/reset',
+	account: () => '/account',
 	signOut: () => '/sign-out',
 	preferences: () => '/preferences',
 

@@ -39,6 +39,26 @@ interface PersonTable {
 	created_at: Generated<Date>;
 	created_by: string | null;
 }
+interface OneTimeLinkTable {
+	id: string;
+	secret_hash: string;
+	purpose: 'invitation' | 'reset';
+	person_id: string;
+	expires_at: Date;
+	used_at: NullableAt;
+	created_at: Generated<Date>;
+	created_by: string | null;
+}
+interface OutboxMailTable {
+	id: string;
+	message_id: string;
+	to_address: string;
+	template: 'invitation' | 'reset' | 'passwordChanged';
+	data: Json<object>;
+	state: Generated<'waiting' | 'sent'>;
+	sent_at: NullableAt;
+	created_at: Generated<Date>;
+}
 interface MembershipTable {
 	person_id: string;
 	role: Role;
@@ -431,6 +451,8 @@ export interface Database {
 	client: ClientTable;
 	person: PersonTable;
 	membership: MembershipTable;
+	one_time_link: OneTimeLinkTable;
+	outbox_mail: OutboxMailTable;
 	session: SessionTable;
 	api_token: ApiTokenTable;
 	attempt: AttemptTable;

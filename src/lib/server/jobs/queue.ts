@@ -8,11 +8,12 @@ import type { Trx } from '../db/with-actor';
 /** The queue's tables are made by the migrate command; the application role may not create any. */
 export const QUEUE_SCHEMA = 'jobs';
 
-export const QUEUES = ['build-product-file', 'sweep'] as const;
+export const QUEUES = ['build-product-file', 'mail', 'sweep'] as const;
 export type QueueName = (typeof QUEUES)[number];
 
 export interface JobData {
 	readonly 'build-product-file': { readonly jobId: string; readonly productFileId: string; readonly personId: string };
+	readonly mail: { readonly mailId: string };
 	readonly sweep: Record<string, never>;
 }
 
@@ -55,22 +56,32 @@ export async function enqueue<Q extends QueueName>(
 		.insertInto('job_progress')
 		.values({ job_id: jobId, kind: queue, subject, person_id: actor.personId, state: 'queued' })
 		.execute();
+	await put(trx, queue, { ...data, jobId, personId: actor.personId }, { id: jobId, retryLimit: 2 });
+	return jobId;
+}
+
+const MAIL_TRIES = 12;
+
+/** Puts a job in the queue that nobody watches, in the transaction that causes it. */
+export const sendInTransaction = (trx: Trx, queue: 'mail', data: JobData['mail']): Promise<void> =>
+	put(trx, queue, data, { retryLimit: MAIL_TRIES });
+
+async function put(
+	trx: Trx,
+	queue: QueueName,
+	data: object,
+	options: { readonly id?: string; readonly retryLimit: number }
+): Promise<void> {
 	const boss = await startQueue({ supervises: false });
-	await boss.send(
-		queue,
-		{ ...data, jobId, personId: actor.personId },
-		{
-			id: jobId,
-			retryLimit: 2,
-			retryBackoff: true,
-			expireInSeconds: 600,
-			db: {
-				executeSql: async (text: string, values: unknown[]) => {
-					const result = await trx.executeQuery(CompiledQuery.raw(text, values));
-					return { rows: [...result.rows], rowCount: result.rows.length };
-				}
+	await boss.send(queue, data, {
+		...options,
+		retryBackoff: true,
+		expireInSeconds: 600,
+		db: {
+			executeSql: async (text: string, values: unknown[]) => {
+				const result = await trx.executeQuery(CompiledQuery.raw(text, values));
+				return { rows: [...result.rows], rowCount: result.rows.length };
 			}
 		}
-	);
-	return jobId;
+	});
 }

@@ -1,8 +1,10 @@
 import { PAGE_SIZE, type ListQuery, type Page } from '$lib/schemas/paging';
 import type { PersonInput } from '$lib/schemas/person';
+import { randomUUID } from 'node:crypto';
 import { requireAct } from '../access/acts';
 import type { Actor, Role } from '../access/actor';
 import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
+import { sendLink } from '../auth/links';
 import { hashPassword } from '../auth/passwords';
 import { newId } from '../db/id';
 import { listClients, listPeople, type ClientRow, type PersonRow } from '../db/people';
@@ -43,10 +45,11 @@ export function addClient(actor: Actor, name: string): Promise<string> {
 	});
 }
 
-/** @throws Refused 'exists' when somebody signs in with that e-mail already. */
+/** Without a password the person is invited by mail and chooses one. @throws Refused 'exists' when somebody signs in with that e-mail already. */
 export async function addPerson(actor: Actor, input: PersonInput): Promise<string> {
 	requireAct(actor, 'managePeople');
-	const passwordHash = await hashPassword(input.password);
+	// Nobody knows the password of somebody who is only invited.
+	const passwordHash = await hashPassword(input.password || randomUUID());
 	return withActor(actor, async (trx) => {
 		const id = newId();
 		const email = input.email.toLowerCase();
@@ -72,9 +75,26 @@ export async function addPerson(actor: Actor, input: PersonInput): Promise<strin
 			stream: WORKSPACE,
 			action: 'person-added',
 			subject: `person/${id}`,
-			after: { roles, clientId: input.clientId || null }
+			after: { roles, clientId: input.clientId || null, invited: input.password === '' }
 		});
+		if (input.password === '') await sendLink(trx, actor, { id, name: input.name, email }, 'invitation', new Date());
 		return id;
+	});
+}
+
+/** Mails a new link to somebody; the one before no longer works. */
+export function inviteAgain(actor: Actor, personId: string): Promise<void> {
+	requireAct(actor, 'managePeople');
+	return withActor(actor, async (trx) => {
+		const person = await trx
+			.selectFrom('person')
+			.select(['id', 'name', 'email'])
+			.where('id', '=', personId)
+			.where('disabled_at', 'is', null)
+			.executeTakeFirst();
+		if (!person) throw new Refused('not-found');
+		await sendLink(trx, actor, person, 'invitation', new Date());
+		await audit(trx, actor, { stream: WORKSPACE, action: 'person-invited', subject: `person/${personId}` });
 	});
 }
 

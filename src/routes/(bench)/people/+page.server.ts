@@ -2,10 +2,10 @@ import { fail } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
 import { zod4 } from 'sveltekit-superforms/adapters';
 import { listQueryOf } from '$lib/schemas/paging';
-import { clientSchema, personSchema } from '$lib/schemas/person';
+import { clientSchema, inviteSchema, personSchema } from '$lib/schemas/person';
 import { signedIn } from '$lib/server/access/signed-in';
-import { answering, orError } from '$lib/server/http/answering';
-import { addClient, addPerson, readPeople } from '$lib/server/services/people';
+import { answering, answeringPlain, orError } from '$lib/server/http/answering';
+import { addClient, addPerson, inviteAgain, readPeople } from '$lib/server/services/people';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, url }) => {
@@ -23,6 +23,11 @@ export const actions = {
 		const form = await superValidate(request, zod4(personSchema));
 		if (!form.valid) return fail(400, { form });
 		return answering(form, () => addPerson(signedIn(locals), form.data));
+	},
+	invite: async ({ request, locals }) => {
+		const parsed = inviteSchema.safeParse(Object.fromEntries(await request.formData()));
+		if (!parsed.success) return fail(400, { refused: { code: 'invalid' as const, data: { field: 'personId' } } });
+		return answeringPlain(() => inviteAgain(signedIn(locals), parsed.data.personId));
 	},
 	addClient: async ({ request, locals }) => {
 		const form = await superValidate(request, zod4(clientSchema));

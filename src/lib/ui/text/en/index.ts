@@ -1,3 +1,4 @@
+import { account } from './account';
 import { batch } from './batch';
 import { claims } from './claims';
 import { common } from './common';
@@ -24,6 +25,7 @@ export const en = {
 	shell,
 	door,
 	errors,
+	account,
 	batch,
 	claims,
 	compare,

@@ -7,6 +7,7 @@ export const shell = {
 	find: 'Find a product',
 	findKey: '/',
 	signOut: 'Sign out',
+	account: 'Account',
 	preparedBy: (workspace: string) => `prepared by ${workspace}`,
 	clientFoot: 'Costmary computes and documents; it compares words and figures and judges no picture or colour.',
 	theme: { label: 'Theme', light: 'Light', dark: 'Dark', system: 'System' },

@@ -1,0 +1,33 @@
+export const account = {
+	invitation: (name: string) => `Welcome, ${name}`,
+	invitationText: (email: string) => `Choose a password for ${email}. You are signed in at once.`,
+	newPassword: 'New password',
+	newPasswordHint: 'At least 12 characters. A sentence is easier to keep than a riddle.',
+	choose: 'Set the password',
+	over: 'This link no longer works',
+	overText: 'It was used already, or its time is over. Ask for a new one.',
+	reset: 'A new password',
+	resetText: 'A link comes by mail. It works once, for an hour.',
+	ask: 'Mail me a link',
+	asked: 'If there is an account with this e-mail, a link is on its way.',
+	forgotten: 'Forgotten your password?',
+	backToSignIn: 'Back to sign-in',
+	title: 'Your account',
+	sentence: (name: string, email: string) => `${name}, ${email}.`,
+	change: 'Change the password',
+	present: 'Present password',
+	wrong: 'This is not your present password.',
+	changed: 'The password is changed. Everywhere else you are signed out.',
+	sessions: 'Where you are signed in',
+	sessionsCaption: 'Your sign-ins',
+	begun: 'since',
+	seen: 'last seen',
+	here: 'here',
+	everywhere: 'Sign out everywhere',
+	home: 'Back to work',
+	faults: {
+		password: (length: number) => `The password has ${length} characters; at least 12 and at most 200 are needed.`,
+		email: (value: string) => (value ? `“${value}” is no e-mail address.` : 'The e-mail address is missing.'),
+		present: 'The present password is missing.'
+	}
+};

@@ -1,5 +1,6 @@
 import { amountOf } from '../composition/amounts';
-import type { Composition, CompositionRow, Contribution, WeighedPart } from '../composition/types';
+import { touching } from '../composition/touching';
+import type { Composition, CompositionRow, Contribution, WeighedMaterial, WeighedPart } from '../composition/types';
 import { weakest, type Estimate } from '../quantity/range';
 import { compare, type Id, type Percent } from '../quantity/units';
 import { isSource, readAllergens, type AllergenReading } from './allergens';
@@ -20,6 +21,8 @@ export interface Candidate {
 	readonly allergen: AllergenReading | null;
 	/** Lowest and highest over all shades, typical of the shade that holds most. */
 	readonly share: Estimate<Percent>;
+	/** The materials that hold any of it, by composition. */
+	readonly within: ReadonlyMap<Composition, readonly WeighedMaterial[]>;
 	/** Every shade holds some. */
 	readonly inEvery: boolean;
 }
@@ -123,7 +126,8 @@ function directCandidate(
 			: keys.has(part.rowKey) && isListed(part);
 	const index = identities.map(({ colourIndex }) => colourIndex).find((each) => each !== null) ?? null;
 	const perfume = identities.some((identity) => perfumeWord(identity) !== null);
-	return { name, doubt, select, colourant, index, perfume, allergen, ...measured(compositions, select) };
+	const sought = { keys, substances: allergen?.substances ?? NO_SUBSTANCES };
+	return { name, doubt, select, colourant, index, perfume, allergen, ...measured(compositions, select, sought) };
 }
 
 function insideCandidate(compositions: readonly Composition[], reading: AllergenReading): Candidate {
@@ -136,18 +140,50 @@ function insideCandidate(compositions: readonly Composition[], reading: Allergen
 		index: null,
 		perfume: false,
 		allergen: reading,
-		...measured(compositions, select)
+		...measured(compositions, select, { keys: NO_KEYS, substances: reading.substances })
 	};
 }
 
-function measured(compositions: readonly Composition[], select: Candidate['select']) {
-	const amounts = compositions.map((composition) => ({ composition, share: amountOf(composition.weighed, select) }));
+/** Where a name can be found at all, so that nothing else is looked through. */
+interface Sought {
+	readonly keys: ReadonlySet<string>;
+	readonly substances: ReadonlySet<Id<'substance'>>;
+}
+const NO_KEYS: ReadonlySet<string> = new Set();
+const NO_SUBSTANCES: ReadonlySet<Id<'substance'>> = new Set();
+
+function measured(compositions: readonly Composition[], select: Candidate['select'], sought: Sought) {
+	const amounts = compositions.map((composition) => {
+		const within = materialsWith(composition, sought);
+		return { composition, within, share: amountOf(within, select) };
+	});
 	const most = amounts.reduce((a, b) => (b.share.typical > a.share.typical ? b : a));
 	return {
-		rows: most.composition.rows.filter((row) => row.contributions.some((each) => select(weighedAs(row, each)))),
+		within: new Map(amounts.map(({ composition, within }) => [composition, within])),
+		rows: rowsWith(most.composition, sought).filter((row) =>
+			row.contributions.some((each) => select(weighedAs(row, each)))
+		),
 		share: united(amounts.map(({ share }) => share)),
 		inEvery: amounts.every(({ share }) => share.high > 0n)
 	};
+}
+
+function materialsWith(composition: Composition, { keys, substances }: Sought): readonly WeighedMaterial[] {
+	const { byRow, bySubstance } = touching(composition);
+	const found = [
+		...[...keys].flatMap((key) => byRow.get(key) ?? []),
+		...[...substances].flatMap((substance) => bySubstance.get(substance) ?? [])
+	];
+	return [...new Set(found)];
+}
+
+function rowsWith(composition: Composition, { keys, substances }: Sought): readonly CompositionRow[] {
+	const { rows, rowsOf } = touching(composition);
+	const found = [
+		...[...keys].flatMap((key) => rows.get(key) ?? []),
+		...[...substances].flatMap((substance) => rowsOf.get(substance) ?? [])
+	];
+	return [...new Set(found)];
 }
 
 /** Over all shades: lowest, highest, and the highest typical. */

@@ -24,13 +24,19 @@ export function weakPairs(
 	placed: readonly PlacedName[],
 	group: OrderedGroup
 ): readonly WeakPair[] {
-	const stakes = placed.map((name) => stakeOf(composition, name));
-	return stakes.flatMap((before, at) =>
-		stakes
+	// Most names of most formulas have one figure: what they hold is worked out only where a pair could turn at all.
+	const known = new Map<PlacedName, Stake>();
+	const stake = (name: PlacedName): Stake => {
+		const made = known.get(name) ?? stakeOf(composition, name);
+		known.set(name, made);
+		return made;
+	};
+	return placed.flatMap((before, at) =>
+		placed
 			.slice(at + 1)
-			.filter(({ share }) => canBeOrdered(share, group) && share.high > before.share.low)
-			.filter((after) => canTurn(before, after, group))
-			.map((after) => describe(before, after, group.from))
+			.filter(({ share }) => share.high > before.share.low && canBeOrdered(share, group))
+			.filter((after) => canTurn(stake(before), stake(after), group))
+			.map((after) => describe(stake(before), stake(after), group.from))
 	);
 }
 
@@ -41,7 +47,7 @@ const canBeOrdered = (share: Estimate<Percent>, { from, strict }: OrderedGroup) 
 function stakeOf(composition: Composition, name: PlacedName): Stake {
 	const held = new Map<WeighedMaterial, Span>();
 	const ranged: RangedPart[] = [];
-	for (const material of composition.weighed) {
+	for (const material of name.within?.get(composition) ?? composition.weighed) {
 		const parts = material.parts.filter(name.select);
 		if (parts.length === 0) continue;
 		held.set(material, fractionOf(material, name.select));
@@ -72,6 +78,7 @@ const varies = ({ low, high }: Span) => low < high;
 
 function canTurn(before: Stake, after: Stake, group: OrderedGroup): boolean {
 	const shared = sharedBy(before, after);
+	if (shared.length === 0 && before.ends.length === 1) return cornerTurns(before, after, group);
 	const shapes = new Map(shared.map((material) => [material, shapeOf(material, before, after)]));
 	const outlines: (readonly Point[])[] = [];
 	for (const [corner, x] of before.ends.entries()) {
@@ -88,6 +95,12 @@ function canTurn(before: Stake, after: Stake, group: OrderedGroup): boolean {
 		outlines.push(outline);
 	}
 	return before.ends.length > 1 && reachesBetween(outlines, group);
+}
+
+/** Where the two vary independently, the least of the one and the most of the other stand at one corner. */
+function cornerTurns(before: Stake, after: Stake, { from, strict }: OrderedGroup): boolean {
+	const [x, y] = [before.ends[0] ?? NONE, after.ends[0] ?? NONE];
+	return y.high > x.low && (y.high > from || (!strict && y.high === from));
 }
 
 /** Between the corners of range lines: only where some corner is ordered and another one turned can a mixture be both. */

@@ -1,4 +1,4 @@
-import type { Contribution, CompositionRow, WeighedPart } from '../composition/types';
+import type { Composition, Contribution, CompositionRow, WeighedMaterial, WeighedPart } from '../composition/types';
 import type { Estimate } from '../quantity/range';
 import type { Id, IsoDate, Percent, Ratio } from '../quantity/units';
 
@@ -104,6 +104,8 @@ export interface PlacedName {
 	readonly name: string;
 	readonly share: Estimate<Percent>;
 	readonly select: (part: WeighedPart) => boolean;
+	/** The materials that can hold any of it, by composition; all of them where nothing is said. */
+	readonly within?: ReadonlyMap<Composition, readonly WeighedMaterial[]>;
 }
 export type Strength = 'restsOnTypical' | 'undecided';
 /** A pair printed before/after that some composition within the suppliers' ranges would print the other way round. */

@@ -135,7 +135,8 @@ export async function findMaterials(
 				select 1 from material_version v join constituent c on c.material_version_id = v.id
 					join substance s on s.id = c.substance_id
 				where v.material_id = m.id and s.inci ilike ${pattern}))
-		order by (m.code = upper(${text})) desc, m.trade_name limit 12`.execute(trx);
+		order by (m.code = upper(${text})) desc, (m.trade_name ilike ${`${pattern.slice(1)}`}) desc,
+			(m.code || ' ' || m.trade_name ilike ${pattern}) desc, m.trade_name limit 12`.execute(trx);
 	return rows;
 }
 

@@ -29,16 +29,27 @@ describe('balance', () => {
 });
 
 describe('paste from a spreadsheet', () => {
+	const row = (names: readonly string[], percent: string, qs = false) => ({ names, percent, qs });
 	test('a column of amounts, comma or point', () => {
-		expect(readPaste('1,5\r\n2.25\n')).toEqual([
-			{ name: '', percent: '1,5' },
-			{ name: '', percent: '2.25' }
-		]);
+		expect(readPaste('1,5\r\n2.25\n')).toEqual([row([], '1,5'), row([], '2.25')]);
 	});
 	test('material and amount, in either order', () => {
-		expect(readPaste('GLY-995\t5.00 %\n8\tOL-CT60')).toEqual([
-			{ name: 'GLY-995', percent: '5.00' },
-			{ name: 'OL-CT60', percent: '8' }
+		expect(readPaste('GLY-995\t5.00 %\nOL-CT60\t8')).toEqual([row(['GLY-995'], '5.00'), row(['OL-CT60'], '8')]);
+		expect(readPaste('5\tGLY-995')).toEqual([row(['GLY-995'], '5')]);
+	});
+	test('a number, a phase and grams stand beside: the column that sums to 100 is meant', () => {
+		expect(readPaste('1\tA\tProcess water\t70\t700\n2\tB\tBrackmul GS\t30\t300')).toEqual([
+			row(['A', 'Process water'], '70'),
+			row(['B', 'Brackmul GS'], '30')
+		]);
+	});
+	test('or the column whose head says %', () => {
+		expect(readPaste('Material\tg\t% w/w\nUrea\t30\t3')).toEqual([row(['Urea'], '3')]);
+	});
+	test('q.s. is understood, and what cannot be read is kept as it was written', () => {
+		expect(readPaste('Process water\tq.s.\nUrea\t1.234,5')).toEqual([
+			row(['Process water'], '', true),
+			expect.objectContaining({ percent: '1.234,5' })
 		]);
 	});
 });

@@ -163,24 +163,56 @@ const substancesOf = (materials: readonly MaterialView[]) =>
 		)
 	);
 
-/** One row of a pasted block: a code or name and an amount, in whichever order the spreadsheet has them. */
+/** One row of a pasted block: every text that may name the line, and its amount as it was written. */
 export interface PastedRow {
-	readonly name: string;
+	readonly names: readonly string[];
 	readonly percent: string;
+	readonly qs: boolean;
 }
 
-/** Reads a block from a spreadsheet: a column of amounts, or two columns of material and amount. */
+const QS = /^(q\.?\s*s\.?p?\.?|ad|to)(\s*(ad|to)?\s*100\s*%?)?$/i;
+const PERCENT_HEAD = /%|w\s*\/\s*w|percent/i;
+const amountIn = (cell: string) => {
+	const parsed = readShare(cell.replace(/\s*%$/, ''));
+	return parsed.ok ? parsed.value : null;
+};
+const isAmount = (cell: string) => amountIn(cell) !== null || QS.test(cell);
+
+/**
+ * Reads a block from a spreadsheet. The column of amounts is the one that its head calls %, else the one that sums to 100, else
+ * the first behind a name: a block may carry line numbers, phases and grams as well.
+ */
 export function readPaste(text: string): readonly PastedRow[] {
-	return text
+	const rows = text
 		.replace(/\r/g, '')
 		.split('\n')
 		.filter((row) => row.trim() !== '')
-		.map((row) => {
-			const cells = row.split('\t').map((cell) => cell.trim());
-			const amounts = cells.filter((cell) => readShare(cell.replace(/\s*%$/, '')).ok);
-			const percent = (amounts.at(-1) ?? '').replace(/\s*%$/, '');
-			return { name: cells.find((cell) => cell !== '' && cell !== amounts.at(-1)) ?? '', percent };
-		});
+		.map((row) => row.split('\t').map((cell) => cell.trim()));
+	const [head = [], ...below] = rows;
+	const headed = below.length > 0 && !head.some(isAmount);
+	const body = headed ? below : rows;
+	const named = headed ? head.findIndex((cell) => PERCENT_HEAD.test(cell)) : -1;
+	const column = named >= 0 ? named : columnOfAmounts(body);
+	return body.map((cells) => {
+		const cell = cells[column] ?? '';
+		const qs = QS.test(cell);
+		return {
+			names: cells.filter((each, at) => at !== column && /[^\d\s.,%]/.test(each)),
+			percent: qs ? '' : cell.replace(/\s*%$/, ''),
+			qs
+		};
+	});
+}
+
+function columnOfAmounts(rows: readonly (readonly string[])[]): number {
+	const width = Math.max(0, ...rows.map((cells) => cells.length));
+	const columns = Array.from({ length: width }, (_, at) => at);
+	const readable = columns.filter((at) => rows.some((cells) => isAmount(cells[at] ?? '')));
+	const sumOf = (at: number) => rows.reduce((sum, cells) => sum + (amountIn(cells[at] ?? '') ?? 0n), 0n);
+	const whole = readable.find((at) => sumOf(at) === WHOLE_LINE);
+	if (whole !== undefined) return whole;
+	const firstName = columns.find((at) => rows.some((cells) => (cells[at] ?? '') !== '' && !isAmount(cells[at] ?? '')));
+	return readable.find((at) => firstName === undefined || at > firstName) ?? readable[0] ?? (firstName ?? 0) + 1;
 }
 
 export interface LineConflict {

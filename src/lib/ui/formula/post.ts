@@ -20,5 +20,7 @@ export async function postJson<T>(
 	const body = new FormData();
 	body.set('payload', JSON.stringify(payload));
 	const response = await fetch(`?/${action}`, { method: 'POST', body, headers: { 'x-sveltekit-action': 'true' } });
+	// Signed out: the answer is the page of the door.
+	if (response.redirected) return { type: 'redirect', status: response.status, location: response.url };
 	return deserialize<{ result: T }, { refused: JsonRefusal }>(await response.text());
 }

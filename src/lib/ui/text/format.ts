@@ -47,7 +47,7 @@ export function formatCount(value: number | bigint, sign: DecimalSign): string {
 
 const UNITS = ['bytes', 'KiB', 'MiB', 'GiB'] as const;
 
-/** A file's size with one decimal from KiB upwards, rounded down so that a size over a limit never reads as within. */
+/** A file's size with one decimal from KiB upwards, rounded up so that a size over a limit never reads as within. */
 export function formatSize(bytes: number, sign: DecimalSign): string {
 	let unit = 0;
 	let tenths = bytes * 10;
@@ -56,7 +56,7 @@ export function formatSize(bytes: number, sign: DecimalSign): string {
 		unit += 1;
 	}
 	if (unit === 0) return `${formatCount(bytes, sign)} ${bytes === 1 ? 'byte' : 'bytes'}`;
-	const cut = Math.floor(tenths);
+	const cut = Math.ceil(tenths);
 	const fraction = cut % 10;
 	return `${Math.floor(cut / 10)}${fraction ? `${sign}${fraction}` : ''} ${UNITS[unit]}`;
 }

@@ -114,6 +114,10 @@ export const formulas = {
 	} as Readonly<Record<string, (by: string | null, path: readonly string[]) => string>>,
 	conflict:
 		'Somebody saved this draft in between. Lines that only one of you changed are joined; for the others choose.',
+	unsettled: (lines: number) =>
+		`${lines} ${lines === 1 ? 'line waits' : 'lines wait'} for your choice between both values; then it can be saved.`,
+	signedOut: 'Not saved: you are signed out. What you typed is kept on this machine; sign in and come back.',
+	pasteLost: 'Nothing was pasted: the connection is gone.',
 	theirs: 'Theirs',
 	yours: 'Yours',
 	lineGone: 'line removed',

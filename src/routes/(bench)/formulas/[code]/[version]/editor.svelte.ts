@@ -3,10 +3,21 @@ import type { BulkTree, BulkView, EditedLine, LineView, MaterialView, Suggestion
 import { mergeLines, type LineConflict, type PastedRow } from '$lib/ui/formula/compute';
 import { postJson, type JsonRefusal } from '$lib/ui/formula/post';
 
-type Saved = 'clean' | 'saving' | 'saved' | 'lost';
+type Saved = 'clean' | 'saving' | 'saved' | 'lost' | 'signedOut' | 'unsettled';
 const copyOf = (lines: readonly LineView[]): EditedLine[] => lines.map((line) => ({ ...line }));
 
+interface Kept extends BulkTree {
+	readonly lines: readonly EditedLine[];
+	readonly rev?: number;
+	readonly base?: readonly LineView[];
+}
+
 const PLAIN = { percent: '', min: '', max: '', qs: false, pinned: null, pinReason: '' } as const;
+
+const isSame = (a: string, b: string) => a.toLowerCase() === b.toLowerCase();
+
+const knownBy = (suggestion: Suggestion): Promise<BulkTree | null> | BulkTree =>
+	suggestion.kind === 'material' ? { materials: [suggestion.material], bulks: [] } : bulkAt(suggestion.code, null);
 
 async function bulkAt(code: string, version: number | null): Promise<BulkTree | null> {
 	const response = await fetch(paths.bulk(code, version));
@@ -23,6 +34,8 @@ export class Editor {
 	conflicts = $state.raw<readonly LineConflict[]>([]);
 	saved = $state<Saved>('clean');
 	restored = $state(false);
+	/** Somebody else's saved lines were joined with these. */
+	joined = $state(false);
 	rev: number;
 	#base = $state.raw<readonly LineView[]>([]);
 	#history: EditedLine[][] = [];
@@ -45,21 +58,32 @@ export class Editor {
 		return JSON.stringify(this.lines) !== JSON.stringify(this.#base);
 	}
 
-	/** The browser's own storage outlives a reload and a lost connection. */
+	/** The browser's own storage outlives a reload and a lost connection; what others saved meanwhile meets it as a conflict. */
 	restore(): void {
 		const kept = localStorage.getItem(this.#key);
 		if (!kept) return;
-		const copy = JSON.parse(kept) as { lines: EditedLine[] } & BulkTree;
-		if (JSON.stringify(copy.lines) === JSON.stringify(this.#base)) return;
-		this.lines = copy.lines.map((line) => ({ ...PLAIN, ...line }));
+		const copy = JSON.parse(kept) as Kept;
+		const lines = copy.lines.map((line) => ({ ...PLAIN, ...line }));
+		if (JSON.stringify(lines) === JSON.stringify(this.#base)) return;
 		this.#know({ materials: copy.materials, bulks: copy.bulks ?? [] });
 		this.restored = true;
+		if (copy.rev === undefined || copy.rev === this.rev) this.lines = lines;
+		else this.#meet(copy.base ?? [], lines, this.#base);
 	}
 
 	keep(): void {
-		const { lines, materials, bulks } = this;
-		if (this.dirty) localStorage.setItem(this.#key, JSON.stringify({ lines, materials, bulks }));
+		const { lines, materials, bulks, rev } = this;
+		const kept: Kept = { lines, materials, bulks, rev, base: this.#base };
+		if (this.dirty) localStorage.setItem(this.#key, JSON.stringify(kept));
 		else localStorage.removeItem(this.#key);
+	}
+
+	/** Joins what is typed here with what somebody else saved; lines that both changed wait for a choice. */
+	#meet(base: readonly LineView[], mine: readonly LineView[], theirs: readonly LineView[]): void {
+		const { lines, conflicts } = mergeLines(base, mine, theirs);
+		this.lines = copyOf(lines);
+		this.conflicts = conflicts;
+		this.joined = true;
 	}
 
 	/** Before a change, so that it can be undone. */
@@ -73,17 +97,20 @@ export class Editor {
 	}
 
 	/** False when the bulk cannot be read. */
-	async add(suggestion: Suggestion, percent = ''): Promise<boolean> {
-		const { kind } = suggestion;
-		const known =
-			kind === 'material' ? { materials: [suggestion.material], bulks: [] } : await bulkAt(suggestion.code, null);
+	async add(suggestion: Suggestion): Promise<boolean> {
+		const known = await knownBy(suggestion);
 		if (!known) return false;
 		this.remember();
+		this.#put(suggestion, known, '', false);
+		return true;
+	}
+
+	#put(suggestion: Suggestion, known: BulkTree, percent: string, qs: boolean): void {
 		this.#know(known);
 		const phase = this.lines.at(-1)?.phase ?? 'A';
-		const { code, name } = kind === 'material' ? suggestion.material : suggestion;
-		this.lines.push({ ...PLAIN, id: crypto.randomUUID(), phase, kind, code, name, percent });
-		return true;
+		const { code, name } = suggestion.kind === 'material' ? suggestion.material : suggestion;
+		if (qs) for (const line of this.lines) line.qs = false;
+		this.lines.push({ ...PLAIN, id: crypto.randomUUID(), phase, kind: suggestion.kind, code, name, percent, qs });
 	}
 
 	/** Pins a bulk to one of its versions, or lets it follow the newest again. */
@@ -102,29 +129,51 @@ export class Editor {
 		this.lines = this.lines.filter((each) => each.id !== line.id);
 	}
 
-	/** Fills amounts from a line on; rows that name a material go to its line, or become one. Answers with names not found. */
+	/**
+	 * Fills amounts from a line on; a row goes to the line that it names exactly, by code or name, or becomes one. Everything is
+	 * looked up before anything is changed. Answers with the names that nothing has. @throws when the connection is gone.
+	 */
 	async paste(from: number, rows: readonly PastedRow[]): Promise<readonly string[]> {
+		const fresh: { readonly row: PastedRow; readonly suggestion: Suggestion; readonly known: BulkTree }[] = [];
+		for (const row of rows) {
+			if (row.names.length === 0 || this.#lineNamed(row.names)) continue;
+			const suggestion = await this.#exactly(row.names);
+			const known = suggestion && (await knownBy(suggestion));
+			if (suggestion && known) fresh.push({ row, suggestion, known });
+		}
 		this.remember();
 		const missing: string[] = [];
 		for (const [offset, row] of rows.entries()) {
-			if (!row.name) {
-				const line = this.lines[from + offset];
-				if (line && !line.qs) line.percent = row.percent;
-				continue;
-			}
-			const line = this.lines.find(({ code, name }) =>
-				[code, name].some((each) => each.toLowerCase() === row.name.toLowerCase())
-			);
-			if (line) Object.assign(line, { percent: row.percent, qs: false });
-			else if (!(await this.#addByName(row))) missing.push(row.name);
+			const line = row.names.length === 0 ? this.lines[from + offset] : this.#lineNamed(row.names);
+			const found = fresh.find((each) => each.row === row);
+			if (line) this.#fill(line, row);
+			else if (found) this.#put(found.suggestion, found.known, row.percent, row.qs);
+			else missing.push(row.names.join(' '));
 		}
 		return missing;
 	}
 
-	async #addByName(row: PastedRow): Promise<boolean> {
-		const response = await fetch(paths.formulaLines(row.name, this.code));
-		const [first] = response.ok ? ((await response.json()) as Suggestion[]) : [];
-		return first ? this.add(first, row.percent) : false;
+	/** An empty cell leaves the amount as it is; what cannot be read stands in the line, marked, as if it had been typed. */
+	#fill(line: EditedLine, { percent, qs }: PastedRow): void {
+		if (qs) for (const each of this.lines) each.qs = each.id === line.id;
+		else if (percent !== '') Object.assign(line, { percent, qs: false });
+	}
+
+	#lineNamed(names: readonly string[]): EditedLine | undefined {
+		return this.lines.find(({ code, name }) => names.some((each) => isSame(each, code) || isSame(each, name)));
+	}
+
+	async #exactly(names: readonly string[]): Promise<Suggestion | null> {
+		for (const name of names) {
+			const response = await fetch(paths.formulaLines(name, this.code));
+			const found = response.ok ? ((await response.json()) as Suggestion[]) : [];
+			const exact = found.filter((suggestion) => {
+				const { code, name: own } = suggestion.kind === 'material' ? suggestion.material : suggestion;
+				return isSame(name, code) || isSame(name, own);
+			});
+			if (exact.length === 1) return exact[0] ?? null;
+		}
+		return null;
 	}
 
 	#know({ materials, bulks }: BulkTree): void {
@@ -134,6 +183,10 @@ export class Editor {
 	}
 
 	async save(): Promise<void> {
+		if (this.conflicts.length > 0) {
+			this.saved = 'unsettled';
+			return;
+		}
 		this.saved = 'saving';
 		this.faults = {};
 		this.refusal = null;
@@ -146,9 +199,10 @@ export class Editor {
 				this.#base = sent;
 				this.saved = 'saved';
 				this.restored = false;
+				this.joined = false;
 				this.keep();
 			} else if (answer.type === 'failure' && answer.data) this.#refused(answer.data.refused);
-			else this.saved = 'lost';
+			else this.saved = answer.type === 'redirect' ? 'signedOut' : 'lost';
 		} catch {
 			this.saved = 'lost';
 		}
@@ -171,12 +225,10 @@ export class Editor {
 		this.saved = 'clean';
 		if (refusal.code === 'conflict') {
 			const theirs = (refusal.data['theirs'] ?? []) as LineView[];
-			const { lines, conflicts } = mergeLines(this.#base, $state.snapshot(this.lines), theirs);
 			this.remember();
-			this.lines = copyOf(lines);
+			this.#meet(this.#base, $state.snapshot(this.lines), theirs);
 			this.#base = theirs;
 			this.rev = refusal.data['rev'] as number;
-			this.conflicts = conflicts;
 		}
 		const faults = [...refusal.faults, ...((refusal.data['faults'] ?? []) as JsonRefusal['faults'])];
 		this.faults = Object.fromEntries(

@@ -17,7 +17,7 @@ export function batchSheetDocument(data: BatchSheetData): TDocumentDefinitions {
 		content: [
 			{ text: title, fontSize: 15.9, bold: true, lineHeight: 1 },
 			lead(t.batch.lead(data.size, data.step)),
-			{ fontSize: TABLE, table: { widths: [24, '*', 66, 66, 66], headerRows: 1, body: rows(data, t) }, layout: ROWS },
+			{ fontSize: TABLE, table: { widths: [36, '*', 66, 66, 66], headerRows: 1, body: rows(data, t) }, layout: ROWS },
 			note(t.batch.signature),
 			note(t.batch.caution)
 		]

@@ -47,6 +47,8 @@ export interface BulkView {
 	readonly code: string;
 	readonly name: string;
 	readonly number: number;
+	/** As the lines name it: the version that they pin, or null for the newest. */
+	readonly pinned: number | null;
 	/** Every released version, newest first. */
 	readonly released: readonly number[];
 	readonly lines: readonly LineView[];

@@ -51,7 +51,17 @@ export interface LineRow {
 	readonly share: string | null;
 	readonly share_max: string | null;
 	readonly is_qs: boolean;
+	readonly pinned_version_id: string | null;
 }
+
+/**
+ * A bulk's place in a tree. One that is pinned is another bulk than the one that follows: both may stand in one formula, each by
+ * its own version.
+ */
+const bulkKey = (formulaId: string, pinned: string | null) =>
+	(pinned === null ? formulaId : `${formulaId}@${pinned}`) as Id<'formula'>;
+/** The formula behind a place of the tree. */
+export const formulaOfKey = (key: string) => key.split('@')[0] ?? key;
 
 /** A stored line as the core reads it. A line without an amount weighs nothing yet. */
 export function lineOf(row: LineRow): FormulaLine {
@@ -66,10 +76,11 @@ export function lineOf(row: LineRow): FormulaLine {
 	const common = { id: row.id as Id<'line'>, phase: row.phase, amount };
 	return row.material_id !== null
 		? { ...common, material: row.material_id as Id<'material'> }
-		: { ...common, formula: row.formula_id as Id<'formula'> };
+		: { ...common, formula: bulkKey(row.formula_id ?? '', row.pinned_version_id) };
 }
 
 export interface Tree {
+	/** By place in the tree (see formulaOfKey), as the formulas below. */
 	readonly versions: ReadonlyMap<string, FormulaVersionRef>;
 	readonly formulas: ReadonlyMap<Id<'formula'>, FormulaVersionLines>;
 }
@@ -81,30 +92,28 @@ export interface Tree {
 export async function loadTree(trx: Trx, root: FormulaVersionRef, instead?: FormulaVersionRef): Promise<Tree> {
 	const versions = new Map<string, FormulaVersionRef>([[root.formulaId, root]]);
 	const formulas = new Map<Id<'formula'>, FormulaVersionLines>();
-	let pending: readonly FormulaVersionRef[] = [root];
+	let pending: readonly (readonly [string, FormulaVersionRef])[] = [[root.formulaId, root]];
 	while (pending.length > 0) {
 		const rows = await linesOf(
 			trx,
-			pending.map((version) => version.id)
+			pending.map(([, version]) => version.id)
 		);
-		const bulks = new Map<string, string | null>();
-		for (const version of pending) {
+		const next: [string, FormulaVersionRef][] = [];
+		for (const [key, version] of pending) {
 			const own = rows.filter((row) => row.formula_version_id === version.id);
-			formulas.set(version.formulaId as Id<'formula'>, {
-				formula: version.formulaId as Id<'formula'>,
+			formulas.set(key as Id<'formula'>, {
+				formula: key as Id<'formula'>,
 				version: version.id as Id<'formulaVersion'>,
 				lines: own.map(lineOf)
 			});
-			for (const row of own) if (row.formula_id) bulks.set(row.formula_id, row.pinned_version_id);
-		}
-		const next: FormulaVersionRef[] = [];
-		for (const [formulaId, pinned] of bulks) {
-			if (versions.has(formulaId)) continue;
-			const stands = pinned === null && instead?.formulaId === formulaId ? instead : null;
-			const version = stands ?? (await answeringFormulaVersion(trx, formulaId, pinned));
-			if (!version) continue;
-			versions.set(formulaId, version);
-			next.push(version);
+			for (const { formula_id: formulaId, pinned_version_id: pinned } of own) {
+				if (formulaId === null || versions.has(bulkKey(formulaId, pinned))) continue;
+				const stands = pinned === null && instead?.formulaId === formulaId ? instead : null;
+				const below = stands ?? (await answeringFormulaVersion(trx, formulaId, pinned));
+				if (!below) continue;
+				versions.set(bulkKey(formulaId, pinned), below);
+				next.push([bulkKey(formulaId, pinned), below]);
+			}
 		}
 		pending = next;
 	}

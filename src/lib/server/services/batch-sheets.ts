@@ -16,7 +16,7 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
 import { config } from '../config';
-import { loadMaterials, loadTree, type MaterialVersionRef, type Tree } from '../db/basis';
+import { formulaOfKey, loadMaterials, loadTree, type MaterialVersionRef, type Tree } from '../db/basis';
 import { formulaByCode, versionsOfFormula, type FormulaHead, type FormulaVersionRow } from '../db/formulas';
 import { withActor, type Trx } from '../db/with-actor';
 import type { Attachment } from '../http/attachment';
@@ -102,7 +102,7 @@ async function namesOf(trx: Trx, tree: Tree): Promise<ReadonlyMap<string, string
 	const rows = await trx
 		.selectFrom('formula')
 		.select(['id', 'name'])
-		.where('id', 'in', [...tree.formulas.keys()])
+		.where('id', 'in', [...new Set([...tree.formulas.keys()].map(formulaOfKey))])
 		.execute();
 	return new Map(rows.map(({ id, name }) => [id, name]));
 }
@@ -120,8 +120,8 @@ function lineView(line: BatchLine, { refs, names, phases, request }: Around) {
 	return {
 		code,
 		name: material?.tradeName ?? '',
-		phase: phases.get(line.path[0] ?? '') ?? '',
-		within: line.formulas.slice(1).map((id) => names.get(id) ?? ''),
+		phase: line.path.map((id) => phases.get(id) ?? '').join(' › '),
+		within: line.formulas.slice(1).map((key) => names.get(formulaOfKey(key)) ?? ''),
 		amount: formatExact(line.amount, GRAM_DECIMALS),
 		exact: formatRatio(line.exact, GRAM_DECIMALS, EXACT_PLACES, 'nearest'),
 		takesRounding: line.takesRounding,

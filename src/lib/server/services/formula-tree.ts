@@ -12,10 +12,11 @@ export async function treeBelow(trx: Trx, lines: readonly LineView[]): Promise<B
 	while (pending.length > 0) {
 		const next: LineView[] = [];
 		for (const line of pending) {
-			if (line.kind !== 'formula' || bulks.has(line.code)) continue;
+			const key = `${line.code} ${line.pinned}`;
+			if (line.kind !== 'formula' || bulks.has(key)) continue;
 			const bulk = await bulkOf(trx, line.code, line.pinned);
 			if (!bulk) continue;
-			bulks.set(line.code, bulk);
+			bulks.set(key, bulk);
 			next.push(...bulk.lines);
 		}
 		pending = next;
@@ -43,6 +44,7 @@ async function bulkOf(trx: Trx, code: string, number: number | null): Promise<Bu
 		code,
 		name: formula.name,
 		number: version.number,
+		pinned: number,
 		released: released.map((each) => each.number),
 		lines: await linesOfVersion(trx, version.id)
 	};

@@ -12,7 +12,7 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
 import { today } from '../clock';
-import { loadMaterials, loadTree, type Tree } from '../db/basis';
+import { formulaOfKey, loadMaterials, loadTree, type Tree } from '../db/basis';
 import { familyOf } from '../db/families';
 import {
 	findBulks,
@@ -28,6 +28,7 @@ import {
 	type FormulaVersionRow
 } from '../db/formulas';
 import { newId } from '../db/id';
+import { formulaCodes } from '../db/reasons';
 import { trialsOf } from '../db/trials';
 import { withActor, type Trx } from '../db/with-actor';
 import { contentHash } from '../hash';
@@ -292,7 +293,8 @@ export function releaseFormula(actor: Actor, code: string, number: number, rev: 
 	return withActor(actor, async (trx) => {
 		const formula = await formulaByCode(trx, code);
 		const version = await lockFormulaDraft(trx, formula.id, number);
-		if (version.rev !== rev) throw new Refused('conflict', { rev: version.rev });
+		if (version.rev !== rev)
+			throw new Refused('conflict', { rev: version.rev, theirs: await linesOfVersion(trx, version.id) });
 		const tree = await loadTree(trx, { id: version.id, formulaId: formula.id, number, releasedAt: new Date() });
 		const faults = await faultsOf(trx, formula.id, tree);
 		if (faults.length > 0) throw new Refused('blocked', { faults });
@@ -326,24 +328,14 @@ async function faultsOf(trx: Trx, formulaId: string, tree: Tree) {
 	const { materials } = await loadMaterials(trx, ids, today());
 	const outcome = compose({ formula: formulaId as Id<'formula'>, formulas: tree.formulas, materials });
 	if (outcome.ok) return [];
-	const codes = await codesOfFormulas(
+	const codes = await formulaCodes(
 		trx,
-		outcome.faults.flatMap((fault) => (fault.kind === 'cycle' ? fault.path : []))
+		outcome.faults.flatMap((fault) => (fault.kind === 'cycle' ? fault.path.map(formulaOfKey) : []))
 	);
 	return outcome.faults.map((fault) => ({
 		...plainFault(fault),
-		path: fault.kind === 'cycle' ? fault.path.map((id) => codes.get(id) ?? '') : null
+		path: fault.kind === 'cycle' ? fault.path.map((key) => codes.get(formulaOfKey(key)) ?? '') : null
 	}));
-}
-
-async function codesOfFormulas(trx: Trx, ids: readonly string[]) {
-	if (ids.length === 0) return new Map<string, string>();
-	const rows = await trx
-		.selectFrom('formula')
-		.select(['id', 'code'])
-		.where('id', 'in', [...ids])
-		.execute();
-	return new Map(rows.map((row) => [row.id, row.code]));
 }
 
 const plainFault = (fault: CompositionFault) => ({

@@ -6,7 +6,7 @@ import type { Actor } from '../access/actor';
 import { productBySlug, type ProductRow } from '../db/products';
 import { formulaCodes } from '../db/reasons';
 import { withActor } from '../db/with-actor';
-import { basisView } from './product-list';
+import { basisView, formulaIdsOf } from './product-list';
 import { readProduct, type Reading } from './readings';
 
 export interface CompositionRowView {
@@ -36,7 +36,7 @@ export function readProductComposition(actor: Actor, slug: string, batchDay: Iso
 		const product = await productBySlug(trx, slug);
 		const reading = await readProduct(trx, product, batchDay);
 		if (reading.kind === 'nothingReleased') return { product, state: reading.kind, basis: null, rows: [], faults: [] };
-		const basis = basisView(reading.basis, await formulaCodes(trx, [...reading.basis.formulaVersions.keys()]));
+		const basis = basisView(reading.basis, await formulaCodes(trx, formulaIdsOf(reading.basis)));
 		if (reading.kind === 'faults') {
 			const faults = reading.faults.map((fault) => ({
 				kind: fault.kind === 'material' ? fault.fault.kind : fault.kind,

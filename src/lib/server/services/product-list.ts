@@ -16,6 +16,7 @@ import type {
 } from '$lib/schemas/list-view';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
+import { formulaOfKey } from '../db/basis';
 import { productBySlug, type ProductRow } from '../db/products';
 import { decisionOn, documentTitles, formulaCodes, type DocumentTitle } from '../db/reasons';
 import { withActor, type Trx } from '../db/with-actor';
@@ -46,12 +47,16 @@ export function readProductList(
 		const product = await productBySlug(trx, slug);
 		const reading = await readProduct(trx, product, batchDay, market);
 		if (reading.kind === 'nothingReleased') return { product, state: reading.kind, basis: null, list: null };
-		const codes = await formulaCodes(trx, [...reading.basis.formulaVersions.keys()]);
+		const codes = await formulaCodes(trx, formulaIdsOf(reading.basis));
 		const basis = basisView(reading.basis, codes);
 		if (reading.kind === 'faults') return { product, state: reading.kind, basis, list: null };
 		return { product, state: reading.kind, basis, list: await listView(trx, reading, codes) };
 	});
 }
+
+export const formulaIdsOf = ({ formulaVersions }: Basis): string[] => [
+	...new Set([...formulaVersions.values()].map(({ formulaId }) => formulaId))
+];
 
 export function basisView(basis: Basis, codes: ReadonlyMap<string, string>): BasisView {
 	return {
@@ -94,7 +99,7 @@ async function listView(trx: Trx, reading: Read, codes: ReadonlyMap<string, stri
 			carryOver: of.role === 'carryOver',
 			materialCode: material?.code ?? '',
 			materialNumber: material?.number ?? 0,
-			formulaCode: codes.get(formula) ?? '',
+			formulaCode: codes.get(formulaOfKey(formula)) ?? '',
 			formulaNumber: reading.basis.formulaVersions.get(formula)?.number ?? 0,
 			lineId: of.path.at(-1) ?? '',
 			weight: formatExact(of.weight.typical, composition.weightDecimals),

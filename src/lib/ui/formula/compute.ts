@@ -106,6 +106,12 @@ export interface Outcome {
 }
 const NOTHING: Outcome = { computed: null, faults: [] };
 
+/** The bulk that a line names, by its pin. */
+export const bulkOf = (line: LineView, bulks: readonly BulkView[]): BulkView | null =>
+	(line.kind === 'formula' && bulks.find(({ code, pinned }) => code === line.code && pinned === line.pinned)) || null;
+/** One that is pinned is another bulk than the one that follows: both may stand in one formula. */
+const keyOf = ({ id, pinned }: BulkView) => (pinned === null ? id : `${id}@${pinned}`) as Id<'formula'>;
+
 function linesOf(lines: readonly LineView[], { materials, bulks }: Known): readonly FormulaLine[] | null {
 	const found = lines.map((line): FormulaLine | null => {
 		const [min, share, max] = [weightOf(line.min), weightOf(line.percent), weightOf(line.max)];
@@ -115,11 +121,12 @@ function linesOf(lines: readonly LineView[], { materials, bulks }: Known): reado
 			? ({ kind: 'qs' } as const)
 			: ({ kind: 'share', min: range(line.min, min), share, max: range(line.max, max) } as const);
 		const common = { id: line.id as Id<'line'>, phase: line.phase, amount };
-		const named = (line.kind === 'formula' ? bulks : materials).find(({ code }) => code === line.code);
-		if (!named) return null;
-		return line.kind === 'formula'
-			? { ...common, formula: named.id as Id<'formula'> }
-			: { ...common, material: named.id as Id<'material'> };
+		if (line.kind === 'formula') {
+			const bulk = bulkOf(line, bulks);
+			return bulk && { ...common, formula: keyOf(bulk) };
+		}
+		const material = materials.find(({ code }) => code === line.code);
+		return material ? { ...common, material: material.id as Id<'material'> } : null;
 	});
 	return found.every((line) => line !== null) ? found : null;
 }
@@ -132,7 +139,7 @@ export function computeLines(lines: readonly LineView[], known: Known, formulaId
 	const formulas = new Map([[formula, { formula, version: 'draft' as Id<'formulaVersion'>, lines: own }]]);
 	for (const bulk of known.bulks) {
 		const below = linesOf(bulk.lines, known);
-		const id = bulk.id as Id<'formula'>;
+		const id = keyOf(bulk);
 		if (below && id !== formula)
 			formulas.set(id, { formula: id, version: bulk.code as Id<'formulaVersion'>, lines: below });
 	}

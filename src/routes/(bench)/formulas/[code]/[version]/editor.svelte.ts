@@ -78,6 +78,15 @@ export class Editor {
 		else localStorage.removeItem(this.#key);
 	}
 
+	/** Takes what was saved elsewhere since, as by going on from a trial; what is typed and not saved meets it. */
+	receive(rev: number, lines: readonly LineView[], known: BulkTree): void {
+		this.#know(known);
+		if (this.dirty) this.#meet(this.#base, $state.snapshot(this.lines), lines);
+		else this.lines = copyOf(lines);
+		this.#base = copyOf(lines);
+		this.rev = rev;
+	}
+
 	/** Joins what is typed here with what somebody else saved; lines that both changed wait for a choice. */
 	#meet(base: readonly LineView[], mine: readonly LineView[], theirs: readonly LineView[]): void {
 		const { lines, conflicts } = mergeLines(base, mine, theirs);
@@ -119,7 +128,6 @@ export class Editor {
 		const own = this.lines.find(({ id }) => id === line.id);
 		if (!known || !own) return;
 		this.remember();
-		this.bulks = this.bulks.filter(({ code }) => !known.bulks.some((bulk) => bulk.code === code));
 		this.#know(known);
 		Object.assign(own, { pinned, pinReason: pinned === null ? '' : own.pinReason });
 	}
@@ -179,7 +187,10 @@ export class Editor {
 	#know({ materials, bulks }: BulkTree): void {
 		const fresh = materials.filter(({ code }) => !this.materials.some((known) => known.code === code));
 		this.materials = [...this.materials, ...fresh];
-		this.bulks = [...this.bulks, ...bulks.filter(({ code }) => !this.bulks.some((known) => known.code === code))];
+		this.bulks = [
+			...this.bulks,
+			...bulks.filter(({ code, pinned }) => !this.bulks.some((known) => known.code === code && known.pinned === pinned))
+		];
 	}
 
 	async save(): Promise<void> {

@@ -582,7 +582,7 @@ export const ACCESS: readonly AccessRow[] = [
 	},
 	{
 		route: '/(bench)/people',
-		call: '?/invite',
+		call: '?/mailLink',
 		address: '/people',
 		body: { personId: NO_ID },
 		answers: [403, 403, 403, 404, 404, 303]

@@ -6,8 +6,8 @@ import { loadActor } from '$lib/server/auth/load-actor';
 import { validateSession } from '$lib/server/auth/sessions';
 import { signIn } from '$lib/server/auth/sign-in';
 import type { Actor } from '$lib/server/access/actor';
-import { deliverMail } from '$lib/server/mail/outbox';
-import { addPerson, inviteAgain } from '$lib/server/services/people';
+import { deliverMail, sweepMails } from '$lib/server/mail/outbox';
+import { addPerson, mailLink } from '$lib/server/services/people';
 import { personSchema } from '$lib/schemas/person';
 import { insertPerson } from './support/people';
 
@@ -60,10 +60,17 @@ describe('an invitation', () => {
 	test('sent again ends the link before it', async () => {
 		const id = await invite('beech');
 		const first = await mailTo('beech@laboratory.example');
-		await inviteAgain(administrator, id);
+		await mailLink(administrator, id);
 		expect(await readLink(first.secret, 'invitation', new Date())).toBeNull();
 		const second = await mailTo('beech@laboratory.example');
 		expect(await readLink(second.secret, 'invitation', new Date())).not.toBeNull();
+	});
+
+	test('is not what somebody gets who has an account already', async () => {
+		const id = await invite('birch');
+		await setPassword('invitation', (await mailTo('birch@laboratory.example')).secret, FIRST, new Date());
+		await mailLink(administrator, id);
+		expect((await mailTo('birch@laboratory.example')).template).toBe('reset');
 	});
 
 	test('is over after a week', async () => {
@@ -110,6 +117,24 @@ describe('a new password', () => {
 		await expect(ask()).rejects.toThrow(refusal('too-many-attempts'));
 	});
 
+	test('cannot be guessed at from an open sign-in', async () => {
+		await invite('gorse');
+		const email = 'gorse@laboratory.example';
+		await setPassword('invitation', (await mailTo(email)).secret, FIRST, new Date());
+		const session = await validateSession(await signedIn(email, FIRST));
+		const actor = await loadActor(session?.personId ?? '');
+		if (!actor) throw new Error('somebody who signed in is there');
+		for (let guess = 1; guess <= 8; guess += 1)
+			await expect(changePassword(actor, 'a guess', SECOND, NOW)).rejects.toThrow(refusal('wrong-credentials'));
+		await expect(changePassword(actor, FIRST, SECOND, NOW)).rejects.toThrow(refusal('too-many-attempts'));
+	});
+
+	test('a mail that the queue lost is sent by the sweep', async () => {
+		await invite('hazel');
+		await sweepMails(new Date(Date.now() + 2 * 60 * 60 * 1000));
+		expect((await mailTo('hazel@laboratory.example')).state).toBe('sent');
+	});
+
 	test('by hand needs the present one, and leaves only the sign-in that changed it', async () => {
 		await invite('fir');
 		const email = 'fir@laboratory.example';
@@ -118,8 +143,8 @@ describe('a new password', () => {
 		const session = await validateSession(other);
 		const actor = await loadActor(session?.personId ?? '');
 		if (!actor) throw new Error('somebody who signed in is there');
-		await expect(changePassword(actor, SECOND, SECOND)).rejects.toThrow(refusal('wrong-credentials'));
-		const { value } = await changePassword(actor, FIRST, SECOND);
+		await expect(changePassword(actor, SECOND, SECOND, NOW)).rejects.toThrow(refusal('wrong-credentials'));
+		const { value } = await changePassword(actor, FIRST, SECOND, NOW);
 		expect(await validateSession(other)).toBeNull();
 		expect(await validateSession(value)).not.toBeNull();
 		await signOutEverywhere(actor);

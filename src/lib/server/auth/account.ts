@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import { systemActor, type Actor } from '../access/actor';
 import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
-import { countAttempt, RESETS_PER_ADDRESS, RESETS_PER_PERSON } from './attempts';
+import { countAttempt, PASSWORD_CHANGES, RESETS_PER_ADDRESS, RESETS_PER_PERSON } from './attempts';
 import { readLink, sendLink, spendLink, type LinkPurpose } from './links';
 import { hashPassword, verifyPassword } from './passwords';
 import { closeAllSessions, openSession, type SessionCookie } from './sessions';
@@ -65,8 +65,9 @@ const tellOfChange = (trx: Trx, { email, name }: { readonly email: string; reado
 	return enqueueMail(trx, email, 'passwordChanged', { name, workspace: workspaceName, address: `${origin}/reset` });
 };
 
-/** @throws Refused 'wrong-credentials' when the present password is not right. */
-export async function changePassword(actor: Actor, present: string, next: string): Promise<SessionCookie> {
+/** @throws Refused 'wrong-credentials' when the present password is not right, 'too-many-attempts' after guesses. */
+export async function changePassword(actor: Actor, present: string, next: string, now: Date): Promise<SessionCookie> {
+	await countAttempt(PASSWORD_CHANGES, actor.personId, now);
 	const row = await handle()
 		.selectFrom('person')
 		.select('password_hash')

@@ -14,6 +14,8 @@ export const SIGN_IN_PER_ADDRESS: AttemptLimit = { name: 'sign-in:address', most
 export const TOKENS_PER_PERSON: AttemptLimit = { name: 'token:person', most: 10, seconds: 60 };
 export const CALLS_PER_TOKEN: AttemptLimit = { name: 'call:token', most: 600, seconds: 60 };
 
+/** An open sign-in must not serve to guess the password behind it. */
+export const PASSWORD_CHANGES: AttemptLimit = { name: 'password:person', most: 8, seconds: 900 };
 /** An hour of asking for a new password. */
 export const RESETS_PER_PERSON: AttemptLimit = { name: 'reset:person', most: 3, seconds: 3600 };
 export const RESETS_PER_ADDRESS: AttemptLimit = { name: 'reset:address', most: 30, seconds: 3600 };

@@ -79,6 +79,17 @@ export async function readLink(secret: string, purpose: LinkPurpose, now: Date):
 	return row ?? null;
 }
 
+/** Somebody was invited and has not accepted yet. */
+export async function waitsForInvitation(trx: Trx, personId: string): Promise<boolean> {
+	const rows = await trx
+		.selectFrom('one_time_link')
+		.select('used_at')
+		.where('person_id', '=', personId)
+		.where('purpose', '=', 'invitation')
+		.execute();
+	return rows.length > 0 && rows.every((row) => row.used_at === null);
+}
+
 /** Marks a link used; false when somebody was first or it is over. */
 export async function spendLink(trx: Trx, secret: string, purpose: LinkPurpose, now: Date): Promise<boolean> {
 	const { numUpdatedRows } = await trx

@@ -3,8 +3,6 @@ import { hash, verify } from '@node-rs/argon2';
 /** argon2id (the library's default algorithm) at the cost that common guidance names: 19 MiB, two passes. */
 const COST = { memoryCost: 19_456, timeCost: 2, parallelism: 1 } as const;
 
-export const PASSWORD_LENGTH = { min: 12, max: 200 } as const;
-
 export const hashPassword = (password: string) => hash(password, COST);
 
 let standIn: Promise<string> | undefined;

@@ -9,6 +9,17 @@ export const waitingMail = (id: string) =>
 		.where('state', '=', 'waiting')
 		.executeTakeFirst();
 
+/** Mails that should have left by then; at most a hundred at a time. */
+export const overdueMails = (before: Date) =>
+	handle()
+		.selectFrom('outbox_mail')
+		.select('id')
+		.where('state', '=', 'waiting')
+		.where('created_at', '<', before)
+		.orderBy('created_at')
+		.limit(100)
+		.execute();
+
 /** What a mail said is forgotten once it is sent: links are secrets. */
 export const markSent = (id: string, at: Date) =>
 	handle()

@@ -1,6 +1,7 @@
 import type PgBoss from 'pg-boss';
 import { sweepAttempts } from '../auth/attempts';
 import { sweepSessions } from '../auth/sessions';
+import { sweepMails } from '../mail/outbox';
 import { sweepUploads } from '../services/uploads-sweep';
 import type { QueueName } from './queue';
 
@@ -9,12 +10,13 @@ const EVERY_QUARTER_HOUR = '*/15 * * * *';
 /** Longer than the longest window of a limit. */
 const ATTEMPTS_KEPT_MS = 24 * 60 * 60 * 1000;
 
-/** Throws away what nobody finished: uploads, sessions, counted attempts. Safe to run twice. */
+/** Throws away what nobody finished (uploads, sessions, counted attempts) and sends mails that are overdue. Safe to run twice. */
 export async function registerSweep(queue: PgBoss): Promise<void> {
 	await queue.work(SWEEP, async () => {
 		const now = new Date();
 		await sweepUploads(now);
 		await sweepSessions();
+		await sweepMails(now);
 		await sweepAttempts(new Date(now.getTime() - ATTEMPTS_KEPT_MS));
 	});
 	await queue.schedule(SWEEP, EVERY_QUARTER_HOUR);

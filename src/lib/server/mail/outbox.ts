@@ -2,7 +2,7 @@ import { createTransport } from 'nodemailer';
 import { writeMail, type MailData, type MailTemplate } from '../../../../templates/mail/index';
 import { config } from '../config';
 import { newId } from '../db/id';
-import { markSent, waitingMail } from '../db/outbox';
+import { markSent, overdueMails, waitingMail } from '../db/outbox';
 import type { Trx } from '../db/with-actor';
 import { sendInTransaction } from '../jobs/queue';
 
@@ -45,4 +45,13 @@ export async function deliverMail(mailId: string): Promise<void> {
 		transport.close();
 	}
 	await markSent(mailId, new Date());
+}
+
+const OVERDUE_MS = 60 * 60 * 1000;
+
+/** Tries again what the queue has given up, so that a mail server that was down for a day loses nothing. */
+export async function sweepMails(now: Date): Promise<void> {
+	for (const { id } of await overdueMails(new Date(now.getTime() - OVERDUE_MS))) {
+		await deliverMail(id).catch((error: unknown) => console.error(JSON.stringify({ mail: id, error: String(error) })));
+	}
 }

@@ -4,7 +4,7 @@ import { randomUUID } from 'node:crypto';
 import { requireAct } from '../access/acts';
 import type { Actor, Role } from '../access/actor';
 import { audit, WORKSPACE_SUBJECT } from '../audit/audit';
-import { sendLink } from '../auth/links';
+import { sendLink, waitsForInvitation } from '../auth/links';
 import { hashPassword } from '../auth/passwords';
 import { newId } from '../db/id';
 import { listClients, listPeople, type ClientRow, type PersonRow } from '../db/people';
@@ -82,8 +82,8 @@ export async function addPerson(actor: Actor, input: PersonInput): Promise<strin
 	});
 }
 
-/** Mails a new link to somebody; the one before no longer works. */
-export function inviteAgain(actor: Actor, personId: string): Promise<void> {
+/** Mails somebody a new link to choose a password; the one before no longer works. */
+export function mailLink(actor: Actor, personId: string): Promise<void> {
 	requireAct(actor, 'managePeople');
 	return withActor(actor, async (trx) => {
 		const person = await trx
@@ -93,13 +93,8 @@ export function inviteAgain(actor: Actor, personId: string): Promise<void> {
 			.where('disabled_at', 'is', null)
 			.executeTakeFirst();
 		if (!person) throw new Refused('not-found');
-		await sendLink(trx, actor, person, 'invitation', new Date());
-		await audit(trx, actor, { stream: WORKSPACE, action: 'person-invited', subject: `person/${personId}` });
+		// Who has accepted an invitation, or was given a password, has an account already: the mail must not say otherwise.
+		await sendLink(trx, actor, person, (await waitsForInvitation(trx, personId)) ? 'invitation' : 'reset', new Date());
+		await audit(trx, actor, { stream: WORKSPACE, action: 'link-mailed', subject: `person/${personId}` });
 	});
-}
-
-/** The clients a product may be made for; officers choose among them. */
-export function readClients(actor: Actor): Promise<readonly ClientRow[]> {
-	requireAct(actor, 'readLaboratory');
-	return withActor(actor, listClients);
 }

@@ -5,7 +5,7 @@ import { listQueryOf } from '$lib/schemas/paging';
 import { clientSchema, inviteSchema, personSchema } from '$lib/schemas/person';
 import { signedIn } from '$lib/server/access/signed-in';
 import { answering, answeringPlain, orError } from '$lib/server/http/answering';
-import { addClient, addPerson, inviteAgain, readPeople } from '$lib/server/services/people';
+import { addClient, addPerson, mailLink, readPeople } from '$lib/server/services/people';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, url }) => {
@@ -24,10 +24,10 @@ export const actions = {
 		if (!form.valid) return fail(400, { form });
 		return answering(form, () => addPerson(signedIn(locals), form.data));
 	},
-	invite: async ({ request, locals }) => {
+	mailLink: async ({ request, locals }) => {
 		const parsed = inviteSchema.safeParse(Object.fromEntries(await request.formData()));
 		if (!parsed.success) return fail(400, { refused: { code: 'invalid' as const, data: { field: 'personId' } } });
-		return answeringPlain(() => inviteAgain(signedIn(locals), parsed.data.personId));
+		return answeringPlain(() => mailLink(signedIn(locals), parsed.data.personId));
 	},
 	addClient: async ({ request, locals }) => {
 		const form = await superValidate(request, zod4(clientSchema));

@@ -26,7 +26,9 @@ export const actions = {
 		if (!locals.actor) redirect(303, '/sign-in?next=/account');
 		const form = await superValidate(request, zod4(changePasswordSchema));
 		if (!form.valid) return fail(400, { form });
-		const answer = await answering(form, () => changePassword(signedIn(locals), form.data.present, form.data.next));
+		const answer = await answering(form, () =>
+			changePassword(signedIn(locals), form.data.present, form.data.next, new Date())
+		);
 		if (!('result' in answer)) return answer;
 		cookies.set(answer.result.name, answer.result.value, answer.result.attributes);
 		return { form, changed: true };

@@ -28,7 +28,8 @@ export const people = {
 		administrator: 'administrator',
 		client: 'client'
 	},
-	addedPerson: 'The person can sign in now.',
+	mailed: 'A link to choose a password is on its way.',
+	addedPerson: 'The person is added, and can sign in with the password given or by the link that is mailed.',
 	addedClient: 'The client is there; products can be made for it.',
 	faults: {
 		name: 'The name is missing, or longer than 200 characters.',

@@ -20,7 +20,6 @@ export const rules = {
 
 export const auditTrail = {
 	title: 'Audit row',
-	caption: 'What was recorded',
 	sentence: 'Written in the transaction of the change it records; nobody can edit it.',
 	who: 'Who',
 	when: 'When',
@@ -73,7 +72,7 @@ export const auditTrail = {
 		'file-shared': 'a product file was shared with the client',
 		'inputs-moved': 'a release reached this product',
 		'person-added': 'a person was added',
-		'person-invited': 'an invitation was mailed',
+		'link-mailed': 'a link to choose a password was mailed',
 		'invitation-accepted': 'an invitation was accepted',
 		'reset-asked': 'a new password was asked for',
 		'password-reset': 'a password was set anew',
@@ -108,7 +107,6 @@ export const desk = {
 	},
 	empty: 'Drafts that you may finish and copies that wait for you stand here, each with a link to the place of work.',
 	products: 'Products',
-	productsCaption: 'Products and what they refer to',
 	noProducts: 'No product yet.',
 	marginTitle: 'Begin here',
 	steps: [

@@ -153,6 +153,14 @@ describe('a base and three variants', () => {
 	});
 });
 
+test('a formula may hold two versions of one bulk, each by its own figures', async () => {
+	// Half of base 1 (4 % glycerol) and half of base 2 (4.5 %): 2 + 2.25 = 4.25 %.
+	await release('BOTH', [bulk(), bulk({ percent: '50', pinned: 1, pinReason: 'Old stock.' })]);
+	const { columns, byIngredient } = await readFamily(officer, 'BASE');
+	const at = columns.findIndex(({ code }) => code === 'BOTH');
+	expect(byIngredient.find(({ name }) => name === 'Glycerin')?.now[at]).toBe('4.25');
+});
+
 test('two versions of the base are compared by line, by ingredient and by list', async () => {
 	const view = await compareVersions(officer, 'BASE', 1, 2);
 	expect(view.lines.filter(({ a, b }) => a !== b)).toMatchObject([{ key: 'GLY', a: '4', b: '4.5' }]);

@@ -1,12 +1,18 @@
 import type { RuleText } from '../schemas/reference';
 
-type Row = readonly [entry: string, citation: string, title: string, text: string, standing?: RuleText['standing']];
+export type ArticleRow = readonly [
+	entry: string,
+	citation: string,
+	title: string,
+	text: string,
+	standing?: RuleText['standing']
+];
 
 const COSMETICS = 'Regulation (EC) No 1223/2009';
 const CLAIMS = 'Regulation (EU) No 655/2013';
 
 /** Short texts in our own words; the official text prevails. */
-const COSMETICS_ROWS: readonly Row[] = [
+const COSMETICS_ROWS: readonly ArticleRow[] = [
 	[
 		'art-2-1-a',
 		'Art. 2(1)(a)',
@@ -264,7 +270,7 @@ const COSMETICS_ROWS: readonly Row[] = [
 	]
 ];
 
-const CLAIM_ROWS: readonly Row[] = [
+const CLAIM_ROWS: readonly ArticleRow[] = [
 	[
 		'criterion-1',
 		'Annex, 1',
@@ -303,9 +309,10 @@ const CLAIM_ROWS: readonly Row[] = [
 	]
 ];
 
-const rule =
+/** Rows of one act as rule texts; `short` stands before each citation. */
+export const articleOf =
 	(act: string, short: string, source: string) =>
-	([entry, citation, title, text, standing = 'confirmed']: Row): RuleText => ({
+	([entry, citation, title, text, standing = 'confirmed']: ArticleRow): RuleText => ({
 		act,
 		entry,
 		citation: `${short}, ${citation}`,
@@ -318,6 +325,6 @@ const rule =
 	});
 
 export const ARTICLES: readonly RuleText[] = [
-	...COSMETICS_ROWS.map(rule('eu-1223-2009', 'Reg. (EC) 1223/2009', `${COSMETICS}, consolidated text`)),
-	...CLAIM_ROWS.map(rule('eu-655-2013', 'Reg. (EU) 655/2013', `${CLAIMS}, applies since 11 July 2013`))
+	...COSMETICS_ROWS.map(articleOf('eu-1223-2009', 'Reg. (EC) 1223/2009', `${COSMETICS}, consolidated text`)),
+	...CLAIM_ROWS.map(articleOf('eu-655-2013', 'Reg. (EU) 655/2013', `${CLAIMS}, applies since 11 July 2013`))
 ];

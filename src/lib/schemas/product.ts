@@ -81,6 +81,16 @@ export const productSchema = z.object({
 	originCountry: z.string().trim().max(80).default(''),
 	pack: packSchema.default({ name: '', size: '', unit: 'ml', gtin: '' })
 });
+/** The words of a product that a person writes, in the order of its forms. */
+export const PRODUCT_WORDS = [
+	'name',
+	'brandName',
+	'functionText',
+	'clientCode',
+	'responsibleName',
+	'responsibleAddress',
+	'originCountry'
+] as const satisfies readonly (keyof ProductInput)[];
 export type ProductInput = z.infer<typeof productSchema>;
 export type PackInput = z.infer<typeof packSchema>;
 

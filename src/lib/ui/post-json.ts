@@ -1,8 +1,10 @@
 import { deserialize } from '$app/forms';
 import type { ActionResult } from '@sveltejs/kit';
 
+type RefusalCode = App.Superforms.Message['code'];
+
 export interface JsonRefusal {
-	readonly code: string;
+	readonly code: RefusalCode;
 	readonly faults: readonly {
 		readonly path: string;
 		readonly value: string;

@@ -134,7 +134,7 @@ function textOf(placed: readonly Placed[], { shades }: MarketRule): string {
 }
 
 /** A perfume behind all names that are no colourant has its place by another rule than weight, where the market has that rule. */
-export function ruledByWeight(placed: readonly Placed[], rule: MarketRule): readonly Placed[] {
+function ruledByWeight(placed: readonly Placed[], rule: MarketRule): readonly Placed[] {
 	const plain = placed.filter(({ candidate }) => !candidate.colourant);
 	if (rule.perfume !== 'last') return plain;
 	return plain.filter(

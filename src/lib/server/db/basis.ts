@@ -189,6 +189,14 @@ export async function loadMaterials(trx: Trx, materialIds: readonly string[], da
 	};
 }
 
+/** A formula version with every bulk and material below it, as they answer on the day. */
+export async function loadFormula(trx: Trx, version: FormulaVersionRef, day: IsoDate, instead?: FormulaVersionRef) {
+	const tree = await loadTree(trx, version, instead);
+	const lines = [...tree.formulas.values()].flatMap((each) => each.lines);
+	const loaded = await loadMaterials(trx, [...new Set(lines.flatMap((line) => line.material ?? []))], day);
+	return { tree, loaded };
+}
+
 /** Constituents with the names and numbers of their substances, in the order of the statement. */
 export async function constituentsOf(trx: Trx, versionIds: readonly string[]) {
 	if (versionIds.length === 0) return [];

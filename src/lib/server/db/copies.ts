@@ -229,3 +229,31 @@ export const headOf = (row: CopyRow): CopyHead => ({
 	createdAt: row.createdAt.toISOString(),
 	createdBy: row.createdByName
 });
+
+/** Copies whose text stands for something outside the laboratory. */
+const LIVE: readonly CopyState[] = ['inReview', 'approvedByLaboratory', 'approvedByClient', 'inUse'];
+
+export interface LiveCopy {
+	readonly id: string;
+	readonly number: number | null;
+	readonly state: CopyState;
+	/** The list as the copy prints it; every frozen copy's content has one. */
+	readonly ingredients: string;
+}
+
+export async function liveCopiesOf(trx: Trx, productId: string): Promise<readonly LiveCopy[]> {
+	const rows = await trx
+		.selectFrom('label_copy')
+		.select(['id', 'number', 'state', 'content'])
+		.where('product_id', '=', productId)
+		.where('state', 'in', [...LIVE])
+		.orderBy('id')
+		.execute();
+	return rows.map(({ content, ...row }) => ({ ...row, ingredients: ingredientsOf(content) }));
+}
+
+function ingredientsOf(content: unknown): string {
+	if (typeof content !== 'object' || content === null) return '';
+	const { ingredients } = content as { ingredients?: unknown };
+	return typeof ingredients === 'string' ? ingredients : '';
+}

@@ -2,6 +2,7 @@ import { sql } from 'kysely';
 import type { LineView } from '$lib/schemas/grid-view';
 import { PAGE_SIZE, type ListQuery, type Page } from '$lib/schemas/paging';
 import { Refused } from '../refused';
+import type { FormulaVersionRef } from './basis';
 import type { Trx } from './with-actor';
 
 export interface FormulaListRow {
@@ -67,6 +68,17 @@ export const versionsOfFormula = (trx: Trx, formulaId: string) =>
 		.orderBy('number', 'desc')
 		.execute();
 export type FormulaVersionRow = Awaited<ReturnType<typeof versionsOfFormula>>[number];
+
+/** A version as the loaders take it; one that is not released counts as released now. */
+export const versionRef = (
+	formulaId: string,
+	version: Pick<FormulaVersionRow, 'id' | 'number' | 'releasedAt'>
+): FormulaVersionRef => ({
+	id: version.id,
+	formulaId,
+	number: version.number,
+	releasedAt: version.releasedAt ?? new Date()
+});
 
 /** @throws Refused 'frozen' when the version is released. */
 export async function lockFormulaDraft(trx: Trx, formulaId: string, number: number) {

@@ -16,8 +16,8 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
 import { config } from '../config';
-import { formulaOfKey, loadMaterials, loadTree, type MaterialVersionRef, type Tree } from '../db/basis';
-import { formulaByCode, versionsOfFormula, type FormulaHead, type FormulaVersionRow } from '../db/formulas';
+import { formulaOfKey, loadFormula, type MaterialVersionRef, type Tree } from '../db/basis';
+import { formulaByCode, versionRef, versionsOfFormula, type FormulaHead, type FormulaVersionRow } from '../db/formulas';
 import { withActor, type Trx } from '../db/with-actor';
 import type { Attachment } from '../http/attachment';
 import { renderInChild } from '../pdf/render-in-child';
@@ -55,25 +55,15 @@ async function weigh(
 	version: FormulaVersionRow,
 	request: BatchRequest
 ): Promise<BatchView> {
-	const ref = {
-		id: version.id,
-		formulaId: formula.id,
-		number: version.number,
-		releasedAt: version.releasedAt ?? new Date()
-	};
-	const tree = await loadTree(trx, ref);
-	const lines = [...tree.formulas.values()].flatMap((each) => each.lines);
-	const { refs, materials } = await loadMaterials(
-		trx,
-		[...new Set(lines.flatMap((line) => line.material ?? []))],
-		today()
-	);
+	const { tree, loaded } = await loadFormula(trx, versionRef(formula.id, version), today());
+	const { refs, materials } = loaded;
 	const outcome = batchSheet(
 		{ formula: formula.id as Id<'formula'>, formulas: tree.formulas, materials },
 		{ size: gramsOf(request.size) ?? 1n, step: gramsOf(request.step) ?? 1n, potency: potencyOf(request, refs) }
 	);
 	if (!outcome.ok) return { lines: [], total: '0', faults: outcome.faults.map(({ kind }) => kind) };
 	const names = await namesOf(trx, tree);
+	const lines = [...tree.formulas.values()].flatMap((each) => each.lines);
 	const phases = new Map(lines.map(({ id, phase }) => [id as string, phase]));
 	return {
 		lines: outcome.value.map((line) => lineView(line, { refs, names, phases, request })),

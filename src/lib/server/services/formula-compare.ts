@@ -6,7 +6,7 @@ import type { LineView } from '$lib/schemas/grid-view';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
-import { formulaByCode, linesOfVersion, versionsOfFormula, type FormulaVersionRow } from '../db/formulas';
+import { formulaByCode, linesOfVersion, versionRef, versionsOfFormula, type FormulaVersionRow } from '../db/formulas';
 import { withActor, type Trx } from '../db/with-actor';
 import { Refused } from '../refused';
 import { ingredientsIn, namedText, readVersion, type Named, type Read } from './formula-family';
@@ -50,8 +50,7 @@ interface Side {
 }
 
 async function sideOf(trx: Trx, formulaId: string, version: FormulaVersionRow): Promise<Side> {
-	const ref = { id: version.id, formulaId, number: version.number, releasedAt: version.releasedAt ?? new Date() };
-	const read = await readVersion(trx, ref);
+	const read = await readVersion(trx, versionRef(formulaId, version));
 	return { lines: await linesOfVersion(trx, version.id), read, list: read ? listOf(read, today()) : '' };
 }
 

@@ -7,9 +7,9 @@ import type { FamilyColumn, FamilyRow, FamilyView } from '$lib/schemas/family-vi
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
-import { loadMaterials, loadTree, type FormulaVersionRef, type LoadedMaterials } from '../db/basis';
+import { loadFormula, type FormulaVersionRef, type LoadedMaterials } from '../db/basis';
 import { familyOf, type FamilyMember } from '../db/families';
-import { formulaByCode, versionsOfFormula } from '../db/formulas';
+import { formulaByCode, versionRef, versionsOfFormula } from '../db/formulas';
 import { withActor, type Trx } from '../db/with-actor';
 
 export interface Read {
@@ -31,13 +31,7 @@ export function readFamily(actor: Actor, code: string): Promise<FamilyView> {
 		const versions = await versionsOfFormula(trx, formula.id);
 		const released = versions.find(({ state }) => state === 'released');
 		const draft = versions.find(({ state }) => state === 'draft');
-		const refOf = (version: (typeof versions)[number]): FormulaVersionRef => ({
-			id: version.id,
-			formulaId: formula.id,
-			number: version.number,
-			releasedAt: version.releasedAt ?? new Date()
-		});
-		const instead = draft && refOf(draft);
+		const instead = draft && versionRef(formula.id, draft);
 		const standing = released ?? draft;
 		const base: FamilyColumn = {
 			code,
@@ -50,7 +44,7 @@ export function readFamily(actor: Actor, code: string): Promise<FamilyView> {
 		const pairs: Pair[] = [
 			{
 				column: base,
-				now: released ? await readVersion(trx, refOf(released)) : null,
+				now: released ? await readVersion(trx, versionRef(formula.id, released)) : null,
 				then: instead ? await readVersion(trx, instead) : null
 			}
 		];
@@ -70,9 +64,7 @@ export async function readVersion(
 	version: FormulaVersionRef,
 	instead?: FormulaVersionRef
 ): Promise<Read | null> {
-	const tree = await loadTree(trx, version, instead);
-	const lines = [...tree.formulas.values()].flatMap((each) => each.lines);
-	const loaded = await loadMaterials(trx, [...new Set(lines.flatMap((line) => line.material ?? []))], today());
+	const { tree, loaded } = await loadFormula(trx, version, today(), instead);
 	const formula = version.formulaId as Id<'formula'>;
 	const outcome = compose({ formula, formulas: tree.formulas, materials: loaded.materials });
 	return outcome.ok ? { composition: outcome.value, loaded } : null;

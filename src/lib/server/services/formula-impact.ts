@@ -3,20 +3,20 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { today } from '../clock';
 import type { FormulaVersionRef } from '../db/basis';
+import { liveCopiesOf } from '../db/copies';
 import { familyOf } from '../db/families';
-import { formulaByCode, versionsOfFormula } from '../db/formulas';
+import { formulaByCode, versionRef, versionsOfFormula } from '../db/formulas';
 import { productById, productsUsingFormulas } from '../db/products';
 import { withActor, type Trx } from '../db/with-actor';
 import { Refused } from '../refused';
-import { LIVE_COPIES } from './moves';
 import { readProduct, readWith, type Reading } from './readings';
 
 /** The draft of a formula as if it were released now. @throws Refused 'not-found' where there is none. */
-export async function draftOf(trx: Trx, code: string): Promise<FormulaVersionRef> {
+async function draftOf(trx: Trx, code: string): Promise<FormulaVersionRef> {
 	const formula = await formulaByCode(trx, code);
 	const draft = (await versionsOfFormula(trx, formula.id)).find(({ state }) => state === 'draft');
 	if (!draft) throw new Refused('not-found');
-	return { id: draft.id, formulaId: formula.id, number: draft.number, releasedAt: new Date() };
+	return versionRef(formula.id, draft);
 }
 
 /** Every product, list and label copy that releasing the saved draft would move; nothing is written. */
@@ -37,14 +37,7 @@ async function impactOn(trx: Trx, productId: string, draft: FormulaVersionRef): 
 	const product = await productById(trx, productId);
 	const before = textOf(await readProduct(trx, product, today()));
 	const after = textOf(await readWith(trx, product, today(), 'EU', draft));
-	const copies = await trx
-		.selectFrom('label_copy')
-		.select(['number', 'state', 'content'])
-		.where('product_id', '=', productId)
-		.where('state', 'in', [...LIVE_COPIES])
-		.orderBy('id')
-		.execute();
-	const printed = (content: unknown) => (content as { readonly ingredients?: string }).ingredients ?? '';
+	const copies = await liveCopiesOf(trx, productId);
 	return {
 		slug: product.slug,
 		name: product.name,
@@ -53,6 +46,6 @@ async function impactOn(trx: Trx, productId: string, draft: FormulaVersionRef): 
 		before,
 		after,
 		moves: before !== after,
-		copies: copies.map(({ number, state, content }) => ({ number, state, moves: printed(content) !== after }))
+		copies: copies.map(({ number, state, ingredients }) => ({ number, state, moves: ingredients !== after }))
 	};
 }

@@ -12,7 +12,7 @@ import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
 import { today } from '../clock';
-import { formulaOfKey, loadMaterials, loadTree, type Tree } from '../db/basis';
+import { formulaOfKey, loadFormula, type FormulaVersionRef } from '../db/basis';
 import { familyOf } from '../db/families';
 import {
 	findBulks,
@@ -22,6 +22,7 @@ import {
 	listFormulas,
 	lockFormulaDraft,
 	productsOfFormula,
+	versionRef,
 	versionsOfFormula,
 	type FormulaHead,
 	type FormulaListRow,
@@ -295,8 +296,7 @@ export function releaseFormula(actor: Actor, code: string, number: number, rev: 
 		const version = await lockFormulaDraft(trx, formula.id, number);
 		if (version.rev !== rev)
 			throw new Refused('conflict', { rev: version.rev, theirs: await linesOfVersion(trx, version.id) });
-		const tree = await loadTree(trx, { id: version.id, formulaId: formula.id, number, releasedAt: new Date() });
-		const faults = await faultsOf(trx, formula.id, tree);
+		const faults = await faultsOf(trx, versionRef(formula.id, { ...version, releasedAt: null }));
 		if (faults.length > 0) throw new Refused('blocked', { faults });
 		const lines = await linesOfVersion(trx, version.id);
 		await trx
@@ -321,12 +321,13 @@ export function releaseFormula(actor: Actor, code: string, number: number, rev: 
 	});
 }
 
-async function faultsOf(trx: Trx, formulaId: string, tree: Tree) {
-	const ids = [
-		...new Set([...tree.formulas.values()].flatMap(({ lines }) => lines.flatMap((line) => line.material ?? [])))
-	];
-	const { materials } = await loadMaterials(trx, ids, today());
-	const outcome = compose({ formula: formulaId as Id<'formula'>, formulas: tree.formulas, materials });
+async function faultsOf(trx: Trx, version: FormulaVersionRef) {
+	const { tree, loaded } = await loadFormula(trx, version, today());
+	const outcome = compose({
+		formula: version.formulaId as Id<'formula'>,
+		formulas: tree.formulas,
+		materials: loaded.materials
+	});
 	if (outcome.ok) return [];
 	const codes = await formulaCodes(
 		trx,

@@ -3,6 +3,7 @@ import type { IsoDate } from '$lib/domain/quantity/units';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
 import { today } from '../clock';
+import { liveCopiesOf } from '../db/copies';
 import { newId } from '../db/id';
 import { formulasUsingMaterial, productById, productsUsingFormulas, type ProductRow } from '../db/products';
 import type { CopyState } from '../db/schema';
@@ -28,9 +29,6 @@ export interface CopyEffect {
 	readonly oldText: string;
 	readonly newText: string;
 }
-
-/** Copies whose text stands for something outside the laboratory. */
-export const LIVE_COPIES: readonly CopyState[] = ['inReview', 'approvedByLaboratory', 'approvedByClient', 'inUse'];
 
 /**
  * Carries a release to every product that it may touch, in the release's own transaction: raises what the product's statements
@@ -93,16 +91,10 @@ async function recordEffects(
 	reading: Reading,
 	cause: Cause
 ): Promise<CopyEffect[]> {
-	const copies = await trx
-		.selectFrom('label_copy')
-		.select(['id', 'number', 'state', 'content', 'market'])
-		.where('product_id', '=', product.id)
-		.where('state', 'in', [...LIVE_COPIES])
-		.orderBy('id')
-		.execute();
+	const copies = await liveCopiesOf(trx, product.id);
 	const newText = reading.kind === 'reading' ? reading.list.text : '';
 	const effects = copies.map((copy): CopyEffect => {
-		const oldText = ingredientsOf(copy.content);
+		const oldText = copy.ingredients;
 		return {
 			productId: product.id,
 			productSlug: product.slug,
@@ -139,11 +131,4 @@ async function recordEffects(
 		after: { cause: cause.label, copies: effects.map(({ copyId, effect }) => ({ copyId, effect })) }
 	});
 	return effects;
-}
-
-/** The list as the copy prints it; every frozen copy's content has it under this name. */
-function ingredientsOf(content: unknown): string {
-	if (typeof content !== 'object' || content === null) return '';
-	const { ingredients } = content as { ingredients?: unknown };
-	return typeof ingredients === 'string' ? ingredients : '';
 }

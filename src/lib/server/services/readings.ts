@@ -7,8 +7,7 @@ import type { Id, IsoDate } from '$lib/domain/quantity/units';
 import { ALLERGENS, NAME_BOOK } from '$lib/reference';
 import {
 	answeringFormulaVersion,
-	loadMaterials,
-	loadTree,
+	loadFormula,
 	type FormulaVersionRef,
 	type LoadedMaterials,
 	type MaterialVersionRef,
@@ -93,8 +92,7 @@ async function read(
 	const stands = instead?.formulaId === product.formulaId && product.pinnedVersionId === null ? instead : null;
 	const version = stands ?? (await answeringFormulaVersion(trx, product.formulaId, product.pinnedVersionId));
 	if (!version) return { kind: 'nothingReleased' };
-	const tree = await loadTree(trx, version, instead);
-	const loaded = await loadMaterials(trx, materialIdsOf(tree), batchDay);
+	const { tree, loaded } = await loadFormula(trx, version, batchDay, instead);
 	const basis = basisOf(version, tree, loaded, batchDay);
 	const outcome = compose({
 		formula: version.formulaId as Id<'formula'>,
@@ -121,10 +119,6 @@ async function read(
 		arranged: wanted.arrangement !== undefined
 	};
 }
-
-const materialIdsOf = (tree: Tree): string[] => [
-	...new Set([...tree.formulas.values()].flatMap(({ lines }) => lines.flatMap((line) => line.material ?? [])))
-];
 
 function basisOf(version: FormulaVersionRef, tree: Tree, loaded: LoadedMaterials, batchDay: IsoDate): Basis {
 	const content = {

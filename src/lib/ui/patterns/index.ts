@@ -16,6 +16,7 @@ export { default as RangeAxis } from './RangeAxis.svelte';
 export { default as RangeBar } from './RangeBar.svelte';
 export { default as RangeKey } from './RangeKey.svelte';
 export { default as ReadinessMark } from './ReadinessMark.svelte';
+export { default as SavedByOthers } from './SavedByOthers.svelte';
 export { default as Sheet } from './Sheet.svelte';
 export { default as Spine } from './Spine.svelte';
 export { default as Strata } from './Strata.svelte';

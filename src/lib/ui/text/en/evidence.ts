@@ -57,7 +57,6 @@ export const evidence = {
 	broken: 'The file cannot be read through. It is kept, but cannot be bound into a product file.',
 	notBindable: 'It is no PDF; it is listed in a product file, not bound into it.',
 	bindable: (pages: number) => `${plural(pages, 'page', 'pages')}, can be bound into a product file.`,
-	expired: 'run out',
 	file: 'The file',
 	facts: {
 		kind: 'Kind',

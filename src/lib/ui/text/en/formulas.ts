@@ -33,7 +33,6 @@ export const formulas = {
 	restored: 'What you typed before is back; it is not saved yet.',
 	release: (number: number) => `Release formula ${number}`,
 	releaseReason: 'A released formula is saved and sums to exactly 100.',
-	balance: 'Balance',
 	missing: (by: string) => `${by} % is missing`,
 	tooMuch: (by: string) => `${by} % too much`,
 	phase: (phase: string) => `Phase ${phase}`,
@@ -67,7 +66,6 @@ export const formulas = {
 	removed: (name: string) => `${name} removed.`,
 	pasted: (rows: number) => `${rows} ${rows === 1 ? 'row' : 'rows'} pasted.`,
 	notFound: (names: string) => `Not found, and left out: ${names}.`,
-	understood: (text: string) => `read as ${text}`,
 	fault: (why: string, value: string, limit: string | null): string => {
 		switch (why) {
 			case 'notANumber':
@@ -123,7 +121,6 @@ export const formulas = {
 	lineGone: 'line removed',
 	marginTitle: 'What this draft does',
 	marginReleased: 'What this version gives',
-	marginLine: (name: string) => name,
 	changed: 'Composition, changed names',
 	unchanged: (count: number) => `${count} ${count === 1 ? 'name' : 'names'} unchanged.`,
 	noBefore: 'There is no released version to compare with.',
@@ -138,12 +135,10 @@ export const formulas = {
 	pinReasonHint: 'why pinned',
 	least: (name: string) => `${name}, least, % w/w`,
 	most: (name: string) => `${name}, most, % w/w`,
-	range: 'range',
 	listSame: 'The list prints the same names in the same order.',
 	notWhole: 'Composition and list appear when the lines make a whole of 100.',
 	weak: (count: number) => `${count} ${count === 1 ? 'place' : 'places'} in the order depend on a supplier’s range.`,
 	leaveOn: 'Allergens are judged for a leave-on product; each product judges for itself.',
-	weighed: 'Weighed',
 	variants: 'Formulas that take this one in',
 	usedIn: 'Products that refer to it',
 	usedInNone: 'No product refers to it yet.',

@@ -1,20 +1,10 @@
-import type { ProductDetails } from '$lib/schemas/product-details';
+import { PRODUCT_WORDS } from '$lib/schemas/product';
 import { products } from './products';
-
-const FIELDS = [
-	'name',
-	'brandName',
-	'functionText',
-	'clientCode',
-	'responsibleName',
-	'responsibleAddress',
-	'originCountry'
-] as const satisfies readonly (keyof ProductDetails)[];
 
 export const productDetails = {
 	title: 'Product',
 	sentence: 'Whose it is, who is responsible for it, its packs, and who assesses it.',
-	fields: FIELDS.map((field) => [field, products.fields[field]] as const),
+	fields: PRODUCT_WORDS.map((field) => [field, products.fields[field]] as const),
 	save: 'Save the product',
 	saved: 'The product is saved. Copies that are frozen keep the words they were approved with.',
 	packs: 'Packs',

@@ -36,8 +36,7 @@ export const products = {
 			right === undefined
 				? `“${value}” is no GTIN; it has 8, 12, 13 or 14 digits.`
 				: `“${value}” has a wrong check digit; ${right} would be right.`
-	},
-	packLine: (client: string, size: string, unit: string) => `${client} · ${size} ${unit}`
+	}
 };
 
 const markets = {
@@ -172,10 +171,8 @@ export const composition = {
 export const productFormula = {
 	title: 'Formula',
 	sentence: 'Which released versions answer for this product.',
-	formula: 'Formula',
 	version: (number: number, day: string) => `version ${number}, released ${day}`,
 	basis: 'Basis',
-	materials: 'Materials',
 	caption: 'Materials and the versions that answer',
 	head: { material: 'Material', supplier: 'Supplier', version: 'Version' },
 	marginText:

@@ -13,9 +13,7 @@ export const shell = {
 	theme: { label: 'Theme', light: 'Light', dark: 'Dark', system: 'System' },
 	place: 'Place',
 	margin: 'Margin',
-	openMargin: 'Open the margin',
 	closeMargin: 'Close the margin',
-	sheetOf: (number: number, all: number) => `Sheet ${number} of ${all}`,
 	entries: {
 		desk: 'Desk',
 		products: 'Products',

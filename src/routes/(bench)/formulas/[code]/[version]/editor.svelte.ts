@@ -1,7 +1,7 @@
 import { paths } from '$lib/ui/paths';
 import type { BulkTree, BulkView, EditedLine, LineView, MaterialView, Suggestion } from '$lib/schemas/grid-view';
 import { mergeLines, type LineConflict, type PastedRow } from '$lib/ui/formula/compute';
-import { postJson, type JsonRefusal } from '$lib/ui/formula/post';
+import { postJson, type JsonRefusal } from '$lib/ui/post-json';
 
 type Saved = 'clean' | 'saving' | 'saved' | 'lost' | 'signedOut' | 'unsettled';
 const copyOf = (lines: readonly LineView[]): EditedLine[] => lines.map((line) => ({ ...line }));

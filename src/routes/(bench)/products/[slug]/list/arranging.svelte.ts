@@ -1,6 +1,5 @@
-import { deserialize } from '$app/forms';
 import { invalidateAll } from '$app/navigation';
-import type { ActionResult } from '@sveltejs/kit';
+import { postJson } from '$lib/ui/post-json';
 import type { RefusalView } from '$lib/schemas/list-view';
 
 /** Names moved one at a time: each move is judged by the server at once, and taken back when it is unlawful. */
@@ -32,13 +31,11 @@ export class Arranging {
 	async #send(names: readonly string[]): Promise<void> {
 		this.busy = true;
 		this.failed = false;
-		const body = new FormData();
-		body.set('payload', JSON.stringify({ market: this.market(), names }));
 		try {
-			const response = await fetch('?/arrange', { method: 'POST', body, headers: { 'x-sveltekit-action': 'true' } });
-			const result: ActionResult = deserialize(await response.text());
-			this.refusals = result.type === 'failure' ? refusalsIn(result.data) : [];
-			this.failed = result.type === 'error' || (result.type === 'failure' && this.refusals.length === 0);
+			const result = await postJson<unknown>('arrange', { market: this.market(), names });
+			this.refusals =
+				result.type === 'failure' ? ((result.data?.refused.data['refusals'] ?? []) as readonly RefusalView[]) : [];
+			this.failed = result.type !== 'success' && this.refusals.length === 0;
 			await invalidateAll();
 		} catch {
 			this.failed = true;
@@ -46,9 +43,4 @@ export class Arranging {
 			this.busy = false;
 		}
 	}
-}
-
-function refusalsIn(data: Record<string, unknown> | undefined): readonly RefusalView[] {
-	const refused = data?.['refused'] as { data?: { refusals?: readonly RefusalView[] } } | undefined;
-	return refused?.data?.refusals ?? [];
 }

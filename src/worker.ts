@@ -2,6 +2,7 @@ import { closePool } from '$lib/server/db/pool';
 import { requireMigrated } from '$lib/server/db/migrated';
 import { registerBuildProductFile } from '$lib/server/jobs/build-product-file';
 import { registerMail } from '$lib/server/jobs/mail';
+import { registerMaterialImports } from '$lib/server/jobs/material-imports';
 import { registerSweep } from '$lib/server/jobs/sweep';
 import { startQueue, stopQueue } from '$lib/server/jobs/queue';
 import { closeBucket } from '$lib/server/storage/bucket';
@@ -11,6 +12,7 @@ async function start(): Promise<void> {
 	await requireMigrated();
 	const queue = await startQueue({ supervises: true });
 	await registerBuildProductFile(queue);
+	await registerMaterialImports(queue);
 	await registerMail(queue);
 	await registerSweep(queue);
 	console.log(JSON.stringify({ worker: 'ready' }));

@@ -29,6 +29,7 @@ function rowsOf({ parts }: DemoMaterial, documentId: string): ConstituentRowInpu
 			: null,
 		use: part.use ?? 'other',
 		nano: part.nano ?? false,
+		origin: null,
 		documentId,
 		page: 1
 	}));

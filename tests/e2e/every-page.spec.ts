@@ -17,6 +17,7 @@ const PAGES: Readonly<Partial<Record<RoleName, readonly string[]>>> = {
 		'/products/nightfold-cream/details',
 		'/materials',
 		'/materials/new',
+		'/materials/import',
 		'/materials/BW-GA20/1',
 		'/formulas',
 		'/formulas/new',

@@ -253,6 +253,60 @@ export const ACCESS: readonly AccessRow[] = [
 		answers: BENCH_CHANGES
 	},
 
+	{ route: '/(bench)/materials/import', call: 'GET', address: '/materials/import', answers: STAFF },
+	{
+		route: '/(bench)/materials/import',
+		call: '?/begin',
+		address: '/materials/import',
+		body: { documentId: NO_ID },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/import/template.csv',
+		call: 'GET',
+		address: '/materials/import/template.csv',
+		answers: STAFF
+	},
+	{
+		route: '/(bench)/materials/import/template.xlsx',
+		call: 'GET',
+		address: '/materials/import/template.xlsx',
+		answers: STAFF
+	},
+	{
+		route: '/(bench)/materials/import/[id]',
+		call: 'GET',
+		address: `/materials/import/${NO_ID}`,
+		answers: [404, 404, 404, 404, 404, 303]
+	},
+	{
+		route: '/(bench)/materials/import/[id]',
+		call: '?/mend',
+		address: `/materials/import/${NO_ID}`,
+		body: { number: '2', min: '1' },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/import/[id]',
+		call: '?/commit',
+		address: `/materials/import/${NO_ID}`,
+		body: { release: 'drafts' },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/import/[id]',
+		call: '?/discard',
+		address: `/materials/import/${NO_ID}`,
+		body: {},
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/import/[id]/report.csv',
+		call: 'GET',
+		address: `/materials/import/${NO_ID}/report.csv`,
+		answers: [404, 404, 404, 404, 404, 303]
+	},
+
 	{ route: '/(bench)/evidence', call: 'GET', address: '/evidence', answers: STAFF },
 	{
 		route: '/(bench)/evidence/[id]',

@@ -1,12 +1,14 @@
 import { z } from 'zod';
 import { casFault, ecFault } from '../domain/material/identifiers';
+import type { Declared } from '../domain/material/types';
 import { parseDecimal, type DecimalFault } from '../domain/quantity/decimal';
-import { PART_DECIMALS, WHOLE_PART } from '../domain/quantity/units';
+import { PART_DECIMALS, WHOLE_PART, type PartShare } from '../domain/quantity/units';
 
 export const CODE_PATTERN = /^[A-Z0-9][A-Z0-9-]{0,31}$/;
 export const USES = ['other', 'preservative', 'uvFilter', 'colourant', 'hairDye'] as const;
 /** What a row of the sheet may be: something in the sum, or a part of another row. */
 export const ROW_ROLES = ['ingredient', 'carryOver', 'impurity', 'processingAid', 'ofWhich'] as const;
+export const ORIGINS = ['plant', 'animal', 'mineral', 'synthetic', 'biotechnological', 'mixed'] as const;
 
 export const newMaterialSchema = z.object({
 	code: z.string().trim().toUpperCase().regex(CODE_PATTERN).default(''),
@@ -32,6 +34,24 @@ export function readFigure(text: string): Figure {
 		: { kind: 'fault', why: parsed.why, limit: parsed.limit };
 }
 
+/** What the figures of a row declare; null when one of them cannot be read. "< 0.1" alone is a bound from 0, wherever it was typed. */
+export function declaredOf(row: {
+	readonly min: string;
+	readonly typical: string;
+	readonly max: string;
+}): Declared | null {
+	const [min, typical, max] = [readFigure(row.min), readFigure(row.typical), readFigure(row.max)];
+	if (min.kind === 'fault' || typical.kind === 'fault' || max.kind === 'fault') return null;
+	const value = (figure: Figure) => (figure.kind === 'value' ? (figure.value as PartShare) : null);
+	const boundOnly = typical.kind === 'value' && typical.open && max.kind === 'none';
+	return {
+		low: value(min),
+		typical: boundOnly ? null : value(typical),
+		high: boundOnly ? value(typical) : value(max),
+		highOpen: boundOnly || (max.kind === 'value' && max.open)
+	};
+}
+
 export const FIGURE_FIELDS = ['min', 'typical', 'max'] as const;
 const LONGEST_FIGURE = 40;
 const figure = z.string().max(LONGEST_FIGURE).default('');
@@ -49,6 +69,7 @@ export const constituentRowSchema = z
 		parent: z.number().int().min(0).nullable().default(null),
 		use: z.enum(USES).default('other'),
 		nano: z.boolean().default(false),
+		origin: z.enum(ORIGINS).nullable().default(null),
 		documentId: z.uuid().nullable().default(null),
 		page: z.number().int().positive().max(100_000).nullable().default(null)
 	})
@@ -90,3 +111,9 @@ export const materialDraftSchema = z
 		});
 	});
 export type MaterialDraft = z.infer<typeof materialDraftSchema>;
+
+export const releaseMaterialSchema = z.object({
+	rev: z.number().int().positive(),
+	/** The first batch day for which the version answers; today without one. */
+	effectiveFrom: z.iso.date().optional()
+});

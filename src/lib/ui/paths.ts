@@ -44,6 +44,10 @@ export const paths = {
 
 	materials: (query?: Query) => withQuery('/materials', query),
 	newMaterial: () => '/materials/new',
+	materialImports: (query?: Query) => withQuery('/materials/import', query),
+	materialImport: (id: string, query?: Query) => withQuery(`/materials/import/${part(id)}`, query),
+	materialImportReport: (id: string) => `/materials/import/${part(id)}/report.csv`,
+	materialTemplate: (as: 'csv' | 'xlsx') => `/materials/import/template.${as}`,
 	material: (code: string, query?: Query) => withQuery(`/materials/${part(code)}`, query),
 	materialVersion: (code: string, version: string | number, query?: Query) =>
 		withQuery(`/materials/${part(code)}/${part(version)}`, query),

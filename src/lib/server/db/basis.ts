@@ -221,6 +221,7 @@ export async function constituentsOf(trx: Trx, versionIds: readonly string[]) {
 			'constituent.ec',
 			'constituent.source_document_id',
 			'constituent.source_page',
+			'constituent.origin',
 			'substance.inci',
 			'substance.name_key',
 			'substance.known',

@@ -132,37 +132,6 @@ export async function supplierNamed(trx: Trx, name: string, personId: string): P
 	return id;
 }
 
-export interface NewSubstance {
-	readonly inci: string;
-	readonly key: string;
-	readonly colourIndex: string | null;
-	readonly known: boolean;
-	readonly cas: string | null;
-}
-
-/** The substance of a name, made when it is new; an unknown name is allowed and stays marked. */
-export async function substanceNamed(trx: Trx, substance: NewSubstance, personId: string): Promise<string> {
-	await trx
-		.insertInto('substance')
-		.values({
-			id: newId(),
-			inci: substance.inci,
-			name_key: substance.key,
-			cas: substance.cas ? [substance.cas] : [],
-			colour_index: substance.colourIndex,
-			known: substance.known,
-			created_by: personId
-		})
-		.onConflict((conflict) => conflict.column('name_key').doNothing())
-		.execute();
-	const { id } = await trx
-		.selectFrom('substance')
-		.select('id')
-		.where('name_key', '=', substance.key)
-		.executeTakeFirstOrThrow();
-	return id;
-}
-
 export interface UseRow {
 	readonly code: string;
 	readonly name: string;

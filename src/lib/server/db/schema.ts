@@ -18,6 +18,9 @@ export type CopyState =
 export type Market = 'EU' | 'GB' | 'US' | 'CA' | 'AU' | 'ASEAN' | 'CH';
 export type SubstanceUse = 'colourant' | 'uvFilter' | 'hairDye' | 'preservative' | 'other';
 export type PartRole = 'ingredient' | 'carryOver' | 'impurity' | 'processingAid';
+export type Origin = 'plant' | 'animal' | 'mineral' | 'synthetic' | 'biotechnological' | 'mixed';
+export type ImportOutcome = 'faulty' | 'newMaterial' | 'newVersion' | 'unchanged';
+export type ImportState = 'reading' | 'unreadable' | 'judged' | 'committing' | 'committed' | 'discarded';
 export type Criterion =
 	'legalCompliance' | 'truthfulness' | 'evidentialSupport' | 'honesty' | 'fairness' | 'informedDecision';
 
@@ -214,6 +217,39 @@ interface ConstituentTable {
 	ec: string | null;
 	source_document_id: string | null;
 	source_page: number | null;
+	origin: Generated<Origin | null>;
+}
+interface MaterialVersionDueTable {
+	material_version_id: string;
+	due: ColumnType<string, string, string>;
+	person_id: string;
+	created_at: Generated<Date>;
+}
+interface MaterialImportTable extends Made {
+	id: string;
+	document_id: string;
+	file_name: string;
+	state: ImportState;
+	problem: NullableJson<object>;
+	ignored_columns: Generated<string[]>;
+	total_rows: Generated<number>;
+	faulty_rows: Generated<number>;
+	new_materials: Generated<number>;
+	new_versions: Generated<number>;
+	unchanged: Generated<number>;
+	release: Generated<boolean>;
+	effective_from: Day;
+	job_id: string | null;
+	committed_at: NullableAt;
+}
+interface MaterialImportRowTable {
+	import_id: string;
+	number: number;
+	code: string;
+	cells: Json<Readonly<Record<string, string>>>;
+	faults: Json<readonly object[]>;
+	faulty: Generated<boolean>;
+	outcome: ImportOutcome;
 }
 interface FormulaTable extends Made {
 	id: string;
@@ -468,6 +504,9 @@ export interface Database {
 	material: MaterialTable;
 	material_version: MaterialVersionTable;
 	constituent: ConstituentTable;
+	material_version_due: MaterialVersionDueTable;
+	material_import: MaterialImportTable;
+	material_import_row: MaterialImportRowTable;
 	formula: FormulaTable;
 	formula_version: FormulaVersionTable;
 	formula_line: FormulaLineTable;

@@ -8,11 +8,24 @@ import type { Trx } from '../db/with-actor';
 /** The queue's tables are made by the migrate command; the application role may not create any. */
 export const QUEUE_SCHEMA = 'jobs';
 
-export const QUEUES = ['build-product-file', 'mail', 'sweep'] as const;
+export const QUEUES = [
+	'build-product-file',
+	'read-material-import',
+	'commit-material-import',
+	'mail',
+	'sweep'
+] as const;
 export type QueueName = (typeof QUEUES)[number];
 
+interface ImportJob {
+	readonly jobId: string;
+	readonly importId: string;
+	readonly personId: string;
+}
 export interface JobData {
 	readonly 'build-product-file': { readonly jobId: string; readonly productFileId: string; readonly personId: string };
+	readonly 'read-material-import': ImportJob;
+	readonly 'commit-material-import': ImportJob;
 	readonly mail: { readonly mailId: string };
 	readonly sweep: Record<string, never>;
 }

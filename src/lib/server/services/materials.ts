@@ -1,24 +1,23 @@
-import { colourIndexIn } from '$lib/domain/ingredients/colour-names';
 import { resolveMaterial } from '$lib/domain/material/resolve';
-import { substanceKey } from '$lib/domain/material/substance-key';
 import type { MaterialFault, MaterialVersion } from '$lib/domain/material/types';
 import { formatExact } from '$lib/domain/quantity/decimal';
 import { PART_DECIMALS, type Id } from '$lib/domain/quantity/units';
-import { readFigure, type ConstituentRowInput, type MaterialDraft, type NewMaterial } from '$lib/schemas/material';
+import type { MaterialDraft, NewMaterial } from '$lib/schemas/material';
 import type { Page } from '$lib/schemas/paging';
 import { requireAct } from '../access/acts';
 import type { Actor } from '../access/actor';
 import { audit } from '../audit/audit';
 import { today } from '../clock';
 import { constituentOf, constituentsOf, type ConstituentRow } from '../db/basis';
+import { insertConstituents } from '../db/constituents';
 import { documentsOf } from '../db/documents';
+import { awaitDay } from '../db/due-versions';
 import { newId } from '../db/id';
 import {
 	listMaterials,
 	listSuppliers,
 	lockMaterialDraft,
 	materialByCode,
-	substanceNamed,
 	supplierNamed,
 	versionsOfMaterial,
 	whereUsed,
@@ -30,7 +29,6 @@ import {
 } from '../db/materials';
 import { withActor, type Trx } from '../db/with-actor';
 import { contentHash } from '../hash';
-import { isKnownName } from '../known-names';
 import { Refused } from '../refused';
 import { moveProducts, type CopyEffect } from './moves';
 
@@ -84,7 +82,8 @@ export function createMaterial(actor: Actor, input: NewMaterial): Promise<string
 	});
 }
 
-async function insertDraft(trx: Trx, actor: Actor, materialId: string, number: number): Promise<string> {
+/** Opens an empty draft of that number; the caller has seen that none is open. */
+export async function insertDraft(trx: Trx, actor: Actor, materialId: string, number: number): Promise<string> {
 	const id = newId();
 	await trx
 		.insertInto('material_version')
@@ -168,7 +167,7 @@ export function saveMaterialDraft(actor: Actor, code: string, number: number, dr
 		const before = await constituentsOf(trx, [version.id]);
 		if (version.rev !== draft.rev) throw new Refused('conflict', { rev: version.rev, theirs: before.map(plainRow) });
 		await trx.deleteFrom('constituent').where('material_version_id', '=', version.id).execute();
-		await insertRows(trx, actor, version.id, draft.rows);
+		await insertConstituents(trx, actor.personId, [{ versionId: version.id, rows: draft.rows }]);
 		const rev = version.rev + 1;
 		await trx.updateTable('material_version').set({ rev }).where('id', '=', version.id).execute();
 		await audit(trx, actor, {
@@ -191,101 +190,77 @@ const plainRow = (row: ConstituentRow) => ({
 	role: row.place === 'ofWhich' ? 'ofWhich' : row.role
 });
 
-const stored = (text: string): { readonly value: string | null; readonly open: boolean } => {
-	const figure = readFigure(text);
-	return figure.kind === 'value'
-		? { value: formatExact(figure.value, PART_DECIMALS), open: figure.open }
-		: { value: null, open: false };
-};
-
-async function insertRows(
-	trx: Trx,
-	actor: Actor,
-	versionId: string,
-	rows: readonly ConstituentRowInput[]
-): Promise<void> {
-	if (rows.length === 0) return;
-	const ids = rows.map(() => newId<'constituent'>());
-	const values = [];
-	for (const [position, row] of rows.entries()) {
-		const substanceId = await substanceNamed(
-			trx,
-			{
-				inci: row.inci,
-				key: substanceKey(row.inci),
-				colourIndex: colourIndexIn(row.inci),
-				known: isKnownName(row.inci),
-				cas: row.cas || null
-			},
-			actor.personId
-		);
-		const typical = stored(row.typical);
-		const max = stored(row.max);
-		// "< 0.1" as the only figure is a bound from 0, wherever it was typed.
-		const boundOnly = typical.open && max.value === null;
-		values.push({
-			id: ids[position] ?? newId(),
-			material_version_id: versionId,
-			position,
-			substance_id: substanceId,
-			place: row.role === 'ofWhich' ? ('ofWhich' as const) : ('inSum' as const),
-			role: row.role === 'ofWhich' ? null : row.role,
-			parent_id: row.role === 'ofWhich' && row.parent !== null ? (ids[row.parent] ?? null) : null,
-			use: row.use,
-			nano: row.nano,
-			low: stored(row.min).value,
-			typical: boundOnly ? null : typical.value,
-			high: boundOnly ? typical.value : max.value,
-			high_open: boundOnly || max.open,
-			cas: row.cas || null,
-			ec: row.ec || null,
-			source_document_id: row.documentId,
-			source_page: row.documentId === null ? null : row.page
-		});
-	}
-	await trx.insertInto('constituent').values(values).execute();
-}
-
 export interface Released {
 	readonly number: number;
+	readonly effectiveFrom: string;
 	readonly effects: readonly CopyEffect[];
 }
 
 /**
- * Freezes the draft as the version that answers from today, and carries what it moves to every product.
- * @throws Refused 'blocked' with the faults of a contradictory composition, 'conflict' when somebody saved in between.
+ * Freezes the draft as the version that answers from the effective day on, and carries what it moves to every product.
+ * @throws Refused 'blocked' with the faults of a contradictory composition, 'conflict' when somebody saved in between,
+ * 'invalid' for a day before the one of the version that answers now.
  */
-export function releaseMaterial(actor: Actor, code: string, number: number, rev: number): Promise<Released> {
+export function releaseMaterial(
+	actor: Actor,
+	code: string,
+	number: number,
+	seen: number,
+	effectiveFrom: string = today()
+): Promise<Released> {
 	requireAct(actor, 'releaseMaterial');
 	return withActor(actor, async (trx) => {
 		const material = await materialByCode(trx, code);
-		const version = await lockMaterialDraft(trx, material.id, number);
-		if (version.rev !== rev) throw new Refused('conflict', { rev: version.rev });
-		const rows = await constituentsOf(trx, [version.id]);
-		const faults = faultsOf(material.id, version.id, number, rows);
-		if (faults.length > 0) throw new Refused('blocked', { faults: faults.map(plainFault) });
-		const day = today();
-		await trx
-			.updateTable('material_version')
-			.set({
-				state: 'released',
-				effective_from: day,
-				content_hash: contentHash(rows.map(hashedRow)),
-				released_at: new Date(),
-				released_by: actor.personId
-			})
-			.where('id', '=', version.id)
-			.execute();
-		await audit(trx, actor, {
-			stream: { kind: 'material', id: material.id },
-			action: 'version-released',
-			subject: `material-version/${version.id}`,
-			after: { number, effectiveFrom: day }
-		});
-		const label = `${material.tradeName}, version ${number}`;
-		const cause = { kind: 'material', versionId: version.id, materialId: material.id, label } as const;
-		return { number, effects: await moveProducts(trx, actor, cause) };
+		const { rev } = await lockMaterialDraft(trx, material.id, number);
+		if (rev !== seen) throw new Refused('conflict', { rev });
+		return releaseDraft(trx, actor, code, number, effectiveFrom);
 	});
+}
+
+/** The same inside a transaction, for a draft that nobody else can have seen. */
+export async function releaseDraft(
+	trx: Trx,
+	actor: Actor,
+	code: string,
+	number: number,
+	effectiveFrom: string
+): Promise<Released> {
+	const material = await materialByCode(trx, code);
+	const version = await lockMaterialDraft(trx, material.id, number);
+	const rows = await constituentsOf(trx, [version.id]);
+	const faults = faultsOf(material.id, version.id, number, rows);
+	if (faults.length > 0) throw new Refused('blocked', { faults: faults.map(plainFault) });
+	await requireLaterDay(trx, material.id, effectiveFrom);
+	await trx
+		.updateTable('material_version')
+		.set({
+			state: 'released',
+			effective_from: effectiveFrom,
+			content_hash: contentHash(rows.map(hashedRow)),
+			released_at: new Date(),
+			released_by: actor.personId
+		})
+		.where('id', '=', version.id)
+		.execute();
+	await audit(trx, actor, {
+		stream: { kind: 'material', id: material.id },
+		action: 'version-released',
+		subject: `material-version/${version.id}`,
+		after: { number, effectiveFrom }
+	});
+	if (effectiveFrom > today()) {
+		await awaitDay(trx, version.id, effectiveFrom, actor.personId);
+		return { number, effectiveFrom, effects: [] };
+	}
+	const label = `${material.tradeName}, version ${number}`;
+	const cause = { kind: 'material', versionId: version.id, materialId: material.id, label } as const;
+	return { number, effectiveFrom, effects: await moveProducts(trx, actor, cause) };
+}
+
+/** A version never answers for days on which a later number already does. */
+async function requireLaterDay(trx: Trx, materialId: string, day: string): Promise<void> {
+	const latest = (await versionsOfMaterial(trx, materialId)).find(({ state }) => state === 'released')?.effectiveFrom;
+	if (latest && day < latest) throw new Refused('invalid', { field: 'effectiveFrom', value: day, limit: latest });
 }
 
 function faultsOf(
@@ -319,6 +294,8 @@ const hashedRow = (row: ConstituentRow, _index: number, rows: readonly Constitue
 	parent: rows.find((each) => each.id === row.parent_id)?.name_key ?? null,
 	use: row.use,
 	nano: row.nano,
+	// Versions hashed before a constituent had an origin keep their hash.
+	...(row.origin === null ? {} : { origin: row.origin }),
 	low: row.low,
 	typical: row.typical,
 	high: row.high,

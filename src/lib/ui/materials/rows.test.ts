@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { declaredWords, judgeRows, type DraftRow } from './rows';
+import { declaredEnds, declaredWords, judgeRows, roomOfRows, type DraftRow } from './rows';
 
 const row = (key: number, more: Partial<DraftRow>): DraftRow => ({
 	key,
@@ -13,6 +13,7 @@ const row = (key: number, more: Partial<DraftRow>): DraftRow => ({
 	parent: null,
 	use: 'other',
 	nano: false,
+	origin: null,
 	documentId: '',
 	page: '',
 	...more
@@ -44,4 +45,11 @@ test('declared figures in words', () => {
 	expect(declaredWords(row(1, { min: '48', max: '52' }), words)).toBe('48 to 52');
 	expect(declaredWords(row(1, { typical: '< 0.1' }), words)).toBe('below 0.1');
 	expect(declaredWords(row(1, {}), words)).toBe('balance');
+});
+test('the room that the others leave, and what is declared, stand on one scale', () => {
+	const rows = [row(1, { min: '65', max: '80' }), row(2, { min: '18', max: '22' }), row(3, { min: '5', max: '20' })];
+	expect(roomOfRows(rows).get(1)).toEqual({ low: '58', high: '77' });
+	expect(declaredEnds(rows[0]!)).toEqual({ low: '65', high: '80' });
+	expect(declaredEnds(row(4, { typical: '< 0.1' }))).toEqual({ low: '0', high: '0.1' });
+	expect(declaredEnds(row(5, {}))).toEqual({ low: '0', high: '100' });
 });

@@ -1,8 +1,9 @@
 import { resolveMaterial } from '$lib/domain/material/resolve';
+import { roomOf } from '$lib/domain/material/room';
 import type { Constituent, MaterialFault, MaterialVersion } from '$lib/domain/material/types';
 import { formatExact } from '$lib/domain/quantity/decimal';
-import { PART_DECIMALS, type Id, type PartShare } from '$lib/domain/quantity/units';
-import { readFigure, type ROW_ROLES, type USES } from '$lib/schemas/material';
+import { PART_DECIMALS, WHOLE_PART, type Id } from '$lib/domain/quantity/units';
+import { declaredOf, type ORIGINS, type ROW_ROLES, type USES } from '$lib/schemas/material';
 
 /** A row of the sheet as it is typed. */
 export interface DraftRow {
@@ -18,32 +19,12 @@ export interface DraftRow {
 	parent: number | null;
 	use: (typeof USES)[number];
 	nano: boolean;
+	origin: (typeof ORIGINS)[number] | null;
 	documentId: string;
 	page: string;
 }
 
 const idOf = (key: number) => String(key) as Id<'constituent'>;
-
-interface Figures {
-	readonly low: PartShare | null;
-	readonly typical: PartShare | null;
-	readonly high: PartShare | null;
-	readonly highOpen: boolean;
-}
-
-/** Null when a figure cannot be read yet; then nothing is computed from the row. */
-function figuresOf(row: DraftRow): Figures | null {
-	const [min, typical, max] = [readFigure(row.min), readFigure(row.typical), readFigure(row.max)];
-	if (min.kind === 'fault' || typical.kind === 'fault' || max.kind === 'fault') return null;
-	const value = (figure: typeof min) => (figure.kind === 'value' ? (figure.value as PartShare) : null);
-	const boundOnly = typical.kind === 'value' && typical.open && max.kind === 'none';
-	return {
-		low: value(min),
-		typical: boundOnly ? null : value(typical),
-		high: boundOnly ? value(typical) : value(max),
-		highOpen: boundOnly || (max.kind === 'value' && max.open)
-	};
-}
 
 export interface Narrowed {
 	readonly low: string;
@@ -64,12 +45,12 @@ export interface Judged {
 	readonly readable: boolean;
 }
 
-/** Reads the sheet as the core does: what the sum narrows, or by how much it contradicts itself. */
-export function judgeRows(rows: readonly DraftRow[]): Judged {
+/** The rows as the core reads constituents; null while a figure cannot be read. */
+function constituentsOf(rows: readonly DraftRow[]): readonly Constituent[] | null {
 	const constituents: Constituent[] = [];
 	for (const row of rows) {
-		const declared = figuresOf(row);
-		if (!declared) return { faults: [], narrowed: new Map(), readable: false };
+		const declared = declaredOf(row);
+		if (!declared) return null;
 		const common = {
 			id: idOf(row.key),
 			substance: row.inci as Id<'substance'>,
@@ -84,7 +65,39 @@ export function judgeRows(rows: readonly DraftRow[]): Judged {
 				: { ...common, place: 'inSum', role: row.role }
 		);
 	}
-	return judgeConstituents(constituents, Number);
+	return constituents;
+}
+
+/** Reads the sheet as the core does: what the sum narrows, or by how much it contradicts itself. */
+export function judgeRows(rows: readonly DraftRow[]): Judged {
+	const constituents = constituentsOf(rows);
+	return constituents ? judgeConstituents(constituents, Number) : { faults: [], narrowed: new Map(), readable: false };
+}
+
+export interface Ends {
+	readonly low: string;
+	readonly high: string;
+}
+
+/** What the others leave each row; null where they alone exceed 100. Empty while a figure cannot be read. */
+export function roomOfRows(rows: readonly DraftRow[]): ReadonlyMap<number, Ends | null> {
+	const text = (value: bigint) => formatExact(value, PART_DECIMALS);
+	return new Map(
+		[...roomOf(constituentsOf(rows) ?? [])].map(([id, room]) => [
+			Number(id),
+			room && { low: text(room.low), high: text(room.high) }
+		])
+	);
+}
+
+/** The ends of what the supplier declared, for drawing; null when a figure cannot be read. */
+export function declaredEnds(row: DraftRow): Ends | null {
+	const declared = declaredOf(row);
+	if (!declared) return null;
+	const { low, typical, high } = declared;
+	const single = low === null && high === null ? typical : null;
+	const text = (value: bigint) => formatExact(value, PART_DECIMALS);
+	return { low: text(single ?? low ?? 0n), high: text(single ?? high ?? WHOLE_PART) };
 }
 
 /** The same for a stored version; `keyOf` turns a constituent's id into the key of its row. */
@@ -136,3 +149,45 @@ export function declaredWords(
 	if (row.typical) return row.typical;
 	return row.min ? words.between(row.min, '100') : words.balance;
 }
+
+/** A constituent as the server sends it. */
+export interface StoredConstituent {
+	readonly id: string;
+	readonly inci: string;
+	readonly cas: string | null;
+	readonly ec: string | null;
+	readonly low: string | null;
+	readonly typical: string | null;
+	readonly high: string | null;
+	readonly high_open: boolean;
+	readonly place: 'inSum' | 'ofWhich';
+	readonly role: Exclude<DraftRow['role'], 'ofWhich'> | null;
+	readonly parent_id: string | null;
+	readonly use: DraftRow['use'];
+	readonly nano: boolean;
+	readonly origin: DraftRow['origin'];
+	readonly source_document_id: string | null;
+	readonly source_page: number | null;
+}
+
+/** Trailing zeros of the database's scale are nobody's typing. */
+const plain = (decimal: string | null) => (decimal === null ? '' : decimal.replace(/\.?0+$/, ''));
+
+/** Stored constituents as rows of the sheet; their keys count from 1. */
+export const rowsOf = (constituents: readonly StoredConstituent[]): DraftRow[] =>
+	constituents.map((row, index) => ({
+		key: index + 1,
+		inci: row.inci,
+		cas: row.cas ?? '',
+		ec: row.ec ?? '',
+		min: plain(row.low),
+		typical: plain(row.typical),
+		max: row.high_open ? `< ${plain(row.high)}` : plain(row.high),
+		role: row.place === 'ofWhich' ? 'ofWhich' : (row.role ?? 'ingredient'),
+		parent: row.parent_id === null ? null : constituents.findIndex(({ id }) => id === row.parent_id) + 1,
+		use: row.use,
+		nano: row.nano,
+		origin: row.origin,
+		documentId: row.source_document_id ?? '',
+		page: row.source_page === null ? '' : String(row.source_page)
+	}));

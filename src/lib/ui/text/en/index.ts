@@ -11,6 +11,7 @@ import { family, impact } from './family';
 import { file } from './file';
 import { formulas } from './formulas';
 import { label } from './label';
+import { materialImport } from './material-import';
 import { materials } from './materials';
 import { people } from './people';
 import { productDetails } from './product-details';
@@ -37,6 +38,7 @@ export const en = {
 	formulas,
 	label,
 	materials,
+	materialImport,
 	people,
 	products,
 	list,

@@ -39,6 +39,7 @@ export const materials = {
 	find: 'Name, code, supplier, INCI, CAS',
 	caption: 'Materials',
 	add: 'Add a material',
+	import: 'Import',
 	supplier: 'Supplier',
 	empty:
 		'A raw material belongs here: its code, its supplier and what it contains, as in “Glycerin 99.5, Selby Oils: Glycerin 99.5 %, Aqua 0.5 %”.',
@@ -98,6 +99,7 @@ export const materials = {
 		max: 'max, %',
 		use: 'Function here',
 		nano: 'nano',
+		origin: 'origin',
 		parent: 'Part of',
 		document: 'Document',
 		page: 'Page',
@@ -111,6 +113,17 @@ export const materials = {
 		colourant: 'colourant',
 		hairDye: 'hair dye'
 	},
+	originUnknown: 'origin not stated',
+	origins: {
+		plant: 'plant',
+		animal: 'animal',
+		mineral: 'mineral',
+		synthetic: 'synthetic',
+		biotechnological: 'biotechnological',
+		mixed: 'mixed'
+	},
+	room: (low: string, high: string) => `the others leave ${low} to ${high}`,
+	noRoom: 'the others alone exceed 100',
 	unknown: 'not in the glossary',
 	nanoName: (inci: string) => `${inci} (nano)`,
 	derived: 'derived',

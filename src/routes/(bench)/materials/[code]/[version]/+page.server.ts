@@ -1,6 +1,5 @@
 import { redirect } from '@sveltejs/kit';
-import { z } from 'zod';
-import { materialDraftSchema } from '$lib/schemas/material';
+import { materialDraftSchema, releaseMaterialSchema } from '$lib/schemas/material';
 import { versionNumberOf } from '$lib/schemas/version-number';
 import { may } from '$lib/server/access/acts';
 import { signedIn } from '$lib/server/access/signed-in';
@@ -8,8 +7,6 @@ import { answeringPlain, orError } from '$lib/server/http/answering';
 import { jsonAction } from '$lib/server/http/json-action';
 import { draftMaterial, readMaterial, releaseMaterial, saveMaterialDraft } from '$lib/server/services/materials';
 import type { Actions, PageServerLoad } from './$types';
-
-const revSchema = z.object({ rev: z.number().int().positive() });
 
 export const load: PageServerLoad = async ({ locals, params }) => {
 	const actor = signedIn(locals);
@@ -23,8 +20,8 @@ export const actions = {
 			saveMaterialDraft(signedIn(locals), params.code, versionNumberOf(params.version), draft)
 		),
 	release: ({ request, locals, params }) =>
-		jsonAction(request, revSchema, ({ rev }) =>
-			releaseMaterial(signedIn(locals), params.code, versionNumberOf(params.version), rev)
+		jsonAction(request, releaseMaterialSchema, ({ rev, effectiveFrom }) =>
+			releaseMaterial(signedIn(locals), params.code, versionNumberOf(params.version), rev, effectiveFrom)
 		),
 	draft: async ({ locals, params }) => {
 		const answer = await answeringPlain(() => draftMaterial(signedIn(locals), params.code));

@@ -24,6 +24,7 @@ export default {
 				'img-src': ['self', 'data:'],
 				'font-src': ['self'],
 				'connect-src': ['self'],
+				'frame-src': ['self'],
 				'object-src': ['none'],
 				'base-uri': ['self'],
 				'form-action': ['self'],

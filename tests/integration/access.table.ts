@@ -216,6 +216,27 @@ export const ACCESS: readonly AccessRow[] = [
 		address: '/formulas/NO-SUCH/impact.json',
 		answers: [404, 404, 403, 403, 404, 303]
 	},
+	{
+		route: '/(bench)/materials/[code]/[version]',
+		call: '?/answer',
+		address: '/materials/NONE/1',
+		body: { question: 'nano', answer: 'absent', documentId: NO_ID },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/[code]/[version]',
+		call: '?/limit',
+		address: '/materials/NONE/1',
+		body: { kind: 'heatLimit', high: '40', documentId: NO_ID },
+		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/materials/[code]/[version]',
+		call: '?/withdrawLimit',
+		address: '/materials/NONE/1',
+		body: { id: NO_ID, reason: 'A' },
+		answers: BENCH_CHANGES
+	},
 	{ route: '/(bench)/formulas/new', call: 'GET', address: '/formulas/new', answers: [200, 200, 403, 403, 404, 303] },
 	{
 		route: '/(bench)/formulas/new',
@@ -327,6 +348,12 @@ export const ACCESS: readonly AccessRow[] = [
 		address: `/evidence/${NO_ID}`,
 		body: { linkId: NO_ID },
 		answers: BENCH_CHANGES
+	},
+	{
+		route: '/(bench)/evidence/[id]/preview',
+		call: 'GET',
+		address: `/evidence/${NO_ID}/preview`,
+		answers: [404, 404, 404, 404, 404, 303]
 	},
 	{
 		route: '/(bench)/evidence/[id]/file',

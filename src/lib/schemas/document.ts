@@ -61,9 +61,16 @@ export const documentDetailsSchema = z
 	});
 export type DocumentDetails = z.infer<typeof documentDetailsSchema>;
 
+/** One document may be sent to so many at a time. */
+const MOST_ADDRESSES = 200;
 export const attachSchema = z.object({
 	kind: z.enum(SUBJECT_KINDS),
-	address: z.string().trim().min(1).max(80)
+	/** Codes or slugs, with spaces, commas or line ends between them. */
+	address: z
+		.string()
+		.max(20_000)
+		.transform((text) => text.split(/[\s,;]+/).filter((each) => each !== ''))
+		.pipe(z.array(z.string().max(80)).min(1).max(MOST_ADDRESSES))
 });
 
 /** What the list of documents may be narrowed to; anything else shows all. */

@@ -69,6 +69,8 @@ export const paths = {
 	evidence: (query?: Query) => withQuery('/evidence', query),
 	evidenceItem: (id: string, query?: Query) => withQuery(`/evidence/${part(id)}`, query),
 	evidencePage: (id: string, page: number) => withQuery(`/evidence/${part(id)}`, { page }),
+	evidencePreview: (id: string, page: number | null) =>
+		`/evidence/${part(id)}/preview${page === null ? '' : `#page=${page}`}`,
 	/** The file itself; a browser that shows it opens it at the page. */
 	evidenceFile: (id: string, query?: { as?: 'inline' | 'attachment' }, page?: number | null) =>
 		withQuery(`/evidence/${part(id)}/file`, query) + (page ? `#page=${page}` : ''),

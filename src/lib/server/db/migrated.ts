@@ -2,7 +2,7 @@ import { handle } from './pool';
 import { sql } from 'kysely';
 
 /** The newest migration this build knows; a test compares it with the folder. */
-export const NEWEST_MIGRATION = '0014_effective_days';
+export const NEWEST_MIGRATION = '0015_answers_and_limits';
 
 /** @throws when the database is behind this build: migrating is a command, never part of a request. */
 export async function requireMigrated(): Promise<void> {

@@ -1,4 +1,6 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
+import type { AllergenLaw, Question } from '$lib/domain/material/questions';
+import type { Answer, LimitKind } from '$lib/schemas/material-answers';
 import type { Role } from '../access/actor';
 
 /** Exact decimals and counts stay text from the database to the domain. */
@@ -218,6 +220,30 @@ interface ConstituentTable {
 	source_document_id: string | null;
 	source_page: number | null;
 	origin: Generated<Origin | null>;
+}
+interface MaterialAnswerTable extends Made {
+	id: string;
+	material_id: string;
+	version_number: number;
+	question: Question;
+	answer: Answer;
+	law: AllergenLaw | null;
+	quantified_from: string | null;
+	document_id: string | null;
+	dated: Day;
+	good_until: Day;
+	remark: Generated<string>;
+}
+interface UseLimitTable extends Made {
+	id: string;
+	material_id: string;
+	kind: LimitKind;
+	category: string | null;
+	low: NullableNumeric;
+	high: NullableNumeric;
+	document_id: string;
+	page: number | null;
+	withdrawn_at: NullableAt;
 }
 interface MaterialVersionDueTable {
 	material_version_id: string;
@@ -504,6 +530,8 @@ export interface Database {
 	material: MaterialTable;
 	material_version: MaterialVersionTable;
 	constituent: ConstituentTable;
+	material_answer: MaterialAnswerTable;
+	use_limit: UseLimitTable;
 	material_version_due: MaterialVersionDueTable;
 	material_import: MaterialImportTable;
 	material_import_row: MaterialImportRowTable;

@@ -1,3 +1,4 @@
+import type { Readable } from 'node:stream';
 import type { DocumentDetails, DocumentSubject, SubjectKind } from '$lib/schemas/document';
 import type { Page } from '$lib/schemas/paging';
 import { requireAct } from '../access/acts';
@@ -36,7 +37,7 @@ import { bucket } from '../storage/bucket';
 import type { Disposition } from '../storage/disposition';
 import { inspectPdf, pdfInMemory } from '../storage/inspect-pdf';
 import { contentKey } from '../storage/keys';
-import { kindOfMediaType, nameFits, nameForKind } from '../storage/kinds';
+import { FILE_KINDS, kindOfMediaType, nameFits, nameForKind } from '../storage/kinds';
 
 /** Long enough to be followed at once, too short to be passed on. */
 const DOWNLOAD_SECONDS = 60;
@@ -166,18 +167,44 @@ export function readDocumentPage(actor: Actor, id: string): Promise<DocumentPage
 	}));
 }
 
-/** Attaches a document to what a person names by code or slug. @throws Refused 'not-found' with what was named. */
-export function attachByAddress(actor: Actor, documentId: string, kind: SubjectKind, address: string): Promise<string> {
+/**
+ * Attaches a document to what a person names by code or slug, one or many; where it is attached already, nothing changes.
+ * @throws Refused 'not-found' with the first name that nothing bears, 'exists' when it is attached to all of them.
+ */
+export function attachByAddress(
+	actor: Actor,
+	documentId: string,
+	kind: SubjectKind,
+	addresses: readonly string[]
+): Promise<number> {
 	requireAct(actor, 'attachDocument');
 	return withActor(actor, async (trx) => {
 		await documentById(trx, documentId);
-		const subject = await subjectAt(trx, kind, address);
-		const present = (await namedLinksOf(trx, documentId)).find(
-			(link) => link.kind === kind && link.address === address
+		const present = new Set(
+			(await namedLinksOf(trx, documentId)).filter((link) => link.kind === kind).map((link) => link.address)
 		);
-		if (present) throw new Refused('exists', { field: 'address', value: address });
-		return attach(trx, actor, documentId, subject);
+		const wanted = [...new Set(addresses)].filter((address) => !present.has(address)).sort();
+		for (const address of wanted) await attach(trx, actor, documentId, await subjectAt(trx, kind, address));
+		if (wanted.length === 0) throw new Refused('exists', { field: 'address', value: addresses.join(', ') });
+		return wanted.length;
 	});
+}
+
+export interface Preview {
+	readonly body: Readable;
+	readonly mediaType: string;
+	readonly bytes: number;
+}
+
+/** The content of a file of a kind that a page may show. @throws Refused 'not-found' for any other, or an encrypted one. */
+export async function previewOf(actor: Actor, id: string): Promise<Preview> {
+	requireAct(actor, 'readLaboratory');
+	const document = await withActor(actor, (trx) => documentById(trx, id));
+	const kind = kindOfMediaType(document.mediaType);
+	if (kind === null || !FILE_KINDS[kind].inline || document.encrypted) throw new Refused('not-found');
+	const content = await bucket().get(contentKey(document.sha256));
+	if (!content) throw new Refused('not-found');
+	return { body: content.body, mediaType: document.mediaType, bytes: content.bytes };
 }
 
 export interface MadeFile {

@@ -30,6 +30,7 @@ import {
 import { withActor, type Trx } from '../db/with-actor';
 import { contentHash } from '../hash';
 import { Refused } from '../refused';
+import { answersOf, type Answers } from './material-answers';
 import { moveProducts, type CopyEffect } from './moves';
 
 export interface MaterialsView {
@@ -99,6 +100,7 @@ export interface MaterialView {
 	readonly constituents: readonly ConstituentRow[];
 	readonly documents: Awaited<ReturnType<typeof documentsOf>>;
 	readonly usedIn: readonly UseRow[];
+	readonly answers: Answers;
 }
 
 /** A material by its code; without a number its newest version. */
@@ -109,11 +111,13 @@ export function readMaterial(actor: Actor, code: string, number: number | null):
 		const versions = await versionsOfMaterial(trx, material.id);
 		const version = number === null ? versions[0] : versions.find((each) => each.number === number);
 		if (!version) throw new Refused('not-found');
+		const constituents = await constituentsOf(trx, [version.id]);
 		return {
 			material,
 			versions,
 			version,
-			constituents: await constituentsOf(trx, [version.id]),
+			constituents,
+			answers: await answersOf(trx, material.id, version, versions, constituents, today()),
 			documents: await documentsOf(trx, 'material', material.id),
 			usedIn: await whereUsed(trx, material.id)
 		};

@@ -58,6 +58,8 @@ export const evidence = {
 	notBindable: 'It is no PDF; it is listed in a product file, not bound into it.',
 	bindable: (pages: number) => `${plural(pages, 'page', 'pages')}, can be bound into a product file.`,
 	file: 'The file',
+	preview: 'Preview',
+	previewOf: (title: string) => `Preview of ${title}`,
 	facts: {
 		kind: 'Kind',
 		fileName: 'Sent as',

@@ -1,4 +1,5 @@
 import { account } from './account';
+import { answers, limits } from './answers';
 import { batch } from './batch';
 import { claims } from './claims';
 import { common } from './common';
@@ -27,6 +28,8 @@ export const en = {
 	door,
 	errors,
 	account,
+	answers,
+	limits,
 	batch,
 	claims,
 	compare,

@@ -70,6 +70,11 @@ export const materials = {
 		supplier: 'The supplier is missing, or longer than 200 characters.'
 	},
 	releasedBy: (name: string, day: string) => `released ${day} by ${name}`,
+	effectiveFrom: (day: string) => `effective from ${day}`,
+	effectiveLabel: 'effective from',
+	effectiveHint: 'The first batch day for which it answers; today without one.',
+	effectiveFault: (day: string, limit: string) =>
+		`${day} lies before ${limit}, from which the present version answers. Choose that day or a later one.`,
 	from: (supplier: string) => `from ${supplier}`,
 	edit: 'New version',
 	save: 'Save the draft',
